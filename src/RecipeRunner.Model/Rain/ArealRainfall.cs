@@ -1,0 +1,130 @@
+using System.Collections.Immutable;
+using System.Globalization;
+using NodaTime;
+using RecipeRunner.Model.Space;
+using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Time;
+
+namespace RecipeRunner.Model.Rain;
+
+/// <summary>Whether an areal value was given.</summary>
+public enum ArealStatus : byte
+{
+    /// <summary>Every gauge with weight in the full network reported.</summary>
+    Complete,
+
+    /// <summary>Some were missing; the value follows from those that reported.</summary>
+    Partial,
+
+    /// <summary>No value: too little reported.</summary>
+    Withheld,
+}
+
+/// <summary>Mean areal rainfall of one basin over one step, with what it rests on.</summary>
+/// <param name="DepthMillimetres">The depth; 0 where withheld.</param>
+/// <param name="Status">Whether the value was given.</param>
+/// <param name="GaugesReporting">Gauges of the full network's weights that reported.</param>
+/// <param name="WeightReporting">The share of the basin's weight in the full network that reported, 0 to 1.</param>
+/// <param name="NearestReportingMetres">Distance from the basin (0 inside) to the nearest reporting gauge; null where none reported.</param>
+public readonly record struct ArealValue(
+    double DepthMillimetres,
+    ArealStatus Status,
+    int GaugesReporting,
+    double WeightReporting,
+    double? NearestReportingMetres
+);
+
+/// <summary>Mean areal rainfall of basins through time.</summary>
+public sealed class ArealRainfall : Artifact, ITabular
+{
+    private readonly ArealValue[] values;
+
+    /// <summary>Creates the series.</summary>
+    /// <param name="basins">The basins, a column each.</param>
+    /// <param name="step">The steps of time.</param>
+    /// <param name="labels">The labels of the steps.</param>
+    /// <param name="values">Values, step after step, one a basin.</param>
+    /// <exception cref="ArgumentException">The number of values is not steps times basins.</exception>
+    public ArealRainfall(BasinLayer basins, TimeStep step, ImmutableArray<LocalDate> labels, ArealValue[] values)
+    {
+        if (values.Length != basins.Basins.Length * labels.Length)
+        {
+            throw new ArgumentException("A value is needed for every basin at every step.", nameof(values));
+        }
+
+        Basins = basins;
+        Step = step;
+        Labels = labels;
+        this.values = values;
+    }
+
+    /// <summary>The basins, a column each.</summary>
+    public BasinLayer Basins { get; }
+
+    /// <summary>The steps of time.</summary>
+    public TimeStep Step { get; }
+
+    /// <summary>The label of each step.</summary>
+    public ImmutableArray<LocalDate> Labels { get; }
+
+    /// <summary>The number of values withheld.</summary>
+    public int WithheldCount => values.Count(value => value.Status == ArealStatus.Withheld);
+
+    /// <summary>The number of values, given or withheld.</summary>
+    public int Count => values.Length;
+
+    /// <summary>The value of one basin at one step.</summary>
+    /// <param name="step">Index of the step.</param>
+    /// <param name="basin">Index of the basin.</param>
+    public ArealValue At(int step, int basin) => values[(step * Basins.Basins.Length) + basin];
+
+    /// <summary>Columns <c>start</c>, <c>end</c> and one a basin with depths in mm, blank where withheld.</summary>
+    public Table ToTable()
+    {
+        var intervals = Labels.Select(Step.IntervalOf).ToArray();
+        return new Table([
+            Column.OfText("start", "Local time after which the rain fell", intervals.Select(i => i.StartText)),
+            Column.OfText("end", "Local time up to which the rain fell", intervals.Select(i => i.EndText)),
+            .. Basins.Basins.Select((basin, b) => DepthColumn(basin, b)),
+        ]);
+    }
+
+    /// <inheritdoc/>
+    public override string Describe() =>
+        string.Create(
+            CultureInfo.InvariantCulture,
+            $"{Basins.Basins.Length:N0} basins x {Labels.Length:N0} steps, {WithheldCount:N0} withheld"
+        );
+
+    /// <inheritdoc/>
+    protected override void WriteCanonical(CanonicalWriter writer)
+    {
+        writer.Write(Basins);
+        writer.Write(Step.ToSettingText());
+        writer.Write(Labels.Length);
+        foreach (var label in Labels)
+        {
+            writer.Write(Step.LabelText(label));
+        }
+
+        foreach (var value in values)
+        {
+            writer.Write(value.DepthMillimetres);
+            writer.Write((int)value.Status);
+            writer.Write(value.GaugesReporting);
+            writer.Write(value.WeightReporting);
+            writer.Write(value.NearestReportingMetres);
+        }
+    }
+
+    private Column DepthColumn(Basin basin, int b) =>
+        Column.OfNumbers(
+            basin.Id,
+            "mm",
+            $"Mean areal rainfall of {basin.Name}; blank where withheld",
+            Enumerable.Range(0, Labels.Length).Select(t => Depth(At(t, b)))
+        );
+
+    private static double? Depth(ArealValue value) =>
+        value.Status == ArealStatus.Withheld ? null : value.DepthMillimetres;
+}

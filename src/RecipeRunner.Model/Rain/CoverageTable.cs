@@ -1,0 +1,67 @@
+using System.Globalization;
+using RecipeRunner.Model.Space;
+using RecipeRunner.Model.Steps;
+
+namespace RecipeRunner.Model.Rain;
+
+/// <summary>What every areal value rests on: a row a basin and step.</summary>
+public sealed class CoverageTable : Artifact, ITabular
+{
+    /// <summary>Creates the table.</summary>
+    /// <param name="areal">The values.</param>
+    public CoverageTable(ArealRainfall areal) => Areal = areal;
+
+    /// <summary>The values.</summary>
+    public ArealRainfall Areal { get; }
+
+    /// <summary>Columns <c>basin, end, gauges_reporting, weight_reporting, nearest_reporting_km, status</c>.</summary>
+    public Table ToTable()
+    {
+        var basins = Areal.Basins.Basins;
+        var rows = Enumerable
+            .Range(0, basins.Length)
+            .SelectMany(b =>
+                Enumerable.Range(0, Areal.Labels.Length).Select(t => (Basin: b, Step: t, Value: Areal.At(t, b)))
+            )
+            .ToArray();
+        var ends = Areal.Labels.Select(label => Areal.Step.IntervalOf(label).EndText).ToArray();
+        return new Table([
+            Column.OfText("basin", "Basin id", rows.Select(row => basins[row.Basin].Id)),
+            Column.OfText("end", "Local time up to which the rain fell", rows.Select(row => ends[row.Step])),
+            Column.OfCounts(
+                "gauges_reporting",
+                "",
+                "Gauges with weight in the full network that reported",
+                rows.Select(row => row.Value.GaugesReporting)
+            ),
+            Column.OfNumbers(
+                "weight_reporting",
+                "",
+                "Share of the basin's weight in the full network that reported, 0 to 1",
+                rows.Select(row => (double?)row.Value.WeightReporting)
+            ),
+            Column.OfNumbers(
+                "nearest_reporting_km",
+                "km",
+                "Distance from the basin (0 inside) to the nearest reporting gauge",
+                rows.Select(row => row.Value.NearestReportingMetres / 1000)
+            ),
+            Column.OfText("status", "complete, partial or withheld", rows.Select(row => StatusText(row.Value.Status))),
+        ]);
+    }
+
+    /// <inheritdoc/>
+    public override string Describe() =>
+        string.Create(CultureInfo.InvariantCulture, $"{Areal.Count:N0} values, {Areal.WithheldCount:N0} withheld");
+
+    /// <inheritdoc/>
+    protected override void WriteCanonical(CanonicalWriter writer) => writer.Write(Areal);
+
+    private static string StatusText(ArealStatus status) =>
+        status switch
+        {
+            ArealStatus.Complete => "complete",
+            ArealStatus.Partial => "partial",
+            _ => "withheld",
+        };
+}
