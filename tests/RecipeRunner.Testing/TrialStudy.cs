@@ -15,6 +15,9 @@ public sealed class TrialStudy(string dataFolder) : IStudy
     /// <summary>Facts that steps stated, in order.</summary>
     public List<(string Name, string Value)> Statements { get; } = [];
 
+    /// <summary>What steps took for granted, in order.</summary>
+    public List<string> Assumptions { get; } = [];
+
     /// <summary>Files that steps created, by path.</summary>
     public Dictionary<string, MemoryStream> Outputs { get; } = new(StringComparer.Ordinal);
 
@@ -69,6 +72,8 @@ public sealed class TrialStudy(string dataFolder) : IStudy
         public override void Find(Finding finding) => study.Findings.Add(finding);
 
         public override void State(string name, string value) => study.Statements.Add((name, value));
+
+        public override void Assume(string sentence) => study.Assumptions.Add(sentence);
 
         public override void Progress(double share) { }
 

@@ -31,6 +31,10 @@ public abstract class StepContext
     /// <param name="value">The fact, the same on every machine.</param>
     public abstract void State(string name, string value);
 
+    /// <summary>Says what the result takes for granted; shown in the summary beside the caution.</summary>
+    /// <param name="sentence">A whole sentence, the same on every machine.</param>
+    public abstract void Assume(string sentence);
+
     /// <summary>Says how far the work has come.</summary>
     /// <param name="share">0 to 1.</param>
     public abstract void Progress(double share);

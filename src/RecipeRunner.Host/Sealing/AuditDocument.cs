@@ -1,0 +1,92 @@
+using System.Text.Json.Nodes;
+using RecipeRunner.Host.Running;
+using RecipeRunner.Host.Summarising;
+using RecipeRunner.Model.Steps;
+
+namespace RecipeRunner.Host.Sealing;
+
+/// <summary>The audit for machines: what was asked, what was read, every step, every finding, what was written.</summary>
+internal static class AuditDocument
+{
+    /// <summary>The version of the audit's form. It changes when a reader of the old form would misread the new one.</summary>
+    public const int Form = 1;
+
+    public static JsonObject Of(StudyRecord record) =>
+        new()
+        {
+            ["form"] = Form,
+            ["tool"] = $"Recipe Runner {ToolVersion.Text}",
+            ["title"] = record.Title,
+            ["notes"] = Array(record.Notes.Select(note => JsonValue.Create(note))),
+            ["caution"] = Caution.Text,
+            ["assumptions"] = Array(record.Assumptions.Select(text => JsonValue.Create(text))),
+            ["recipe"] = record.RecipeName,
+            ["settings"] = Array(record.Settings.Select(Setting)),
+            ["recipe_files"] = Array(record.RecipeFiles.Select(FileEntry)),
+            ["inputs"] = Array(record.Inputs.Select(FileEntry)),
+            ["journal"] = Array(record.Journal.Select(Entry)),
+            ["findings"] = Array(record.Findings.Select(FindingEntry)),
+            ["outputs"] = Array(record.Outputs.Select(FileEntry)),
+        };
+
+    private static JsonObject Setting(SettingUsed setting) =>
+        new()
+        {
+            ["name"] = setting.Name,
+            ["value"] = setting.Value,
+            ["default"] = setting.IsDefault,
+        };
+
+    private static JsonObject FileEntry(FileRecord file) =>
+        new()
+        {
+            ["path"] = file.Path,
+            ["bytes"] = file.Bytes,
+            ["sha256"] = file.Sha256,
+        };
+
+    private static JsonObject Entry(JournalEntry entry) =>
+        new()
+        {
+            ["step"] = entry.Number,
+            ["title"] = entry.Title,
+            ["type"] = entry.StepType,
+            ["library"] = entry.Library,
+            ["source"] = entry.Source,
+            ["recipe_file"] = entry.Line.File,
+            ["recipe_line"] = entry.Line.Line,
+            ["settings"] = Pairs(entry.Settings),
+            ["inputs"] = Array(entry.Inputs.Select(InputEntry)),
+            ["output"] = new JsonObject { ["what"] = entry.Output.Describe(), ["sha256"] = entry.Output.Digest },
+            ["facts"] = Pairs(entry.Statements),
+            ["files_read"] = Array(entry.FilesRead.Select(file => JsonValue.Create(file))),
+            ["files_written"] = Array(entry.FilesWritten.Select(file => JsonValue.Create(file))),
+            ["findings"] = Array(entry.Findings.Select(FindingEntry)),
+        };
+
+    private static JsonObject InputEntry(StepInput input) =>
+        new()
+        {
+            ["name"] = input.Name,
+            ["step"] = input.Entry,
+            ["sha256"] = input.Digest,
+        };
+
+    private static JsonObject FindingEntry(Finding finding) =>
+        new()
+        {
+            ["severity"] = SeverityWord.Of(finding.Severity),
+            ["code"] = finding.Code,
+            ["file"] = finding.Where.File,
+            ["line"] = finding.Where.Line,
+            ["column"] = finding.Where.Column,
+            ["item"] = finding.Where.Item,
+            ["what"] = finding.What,
+            ["mend"] = finding.Mend,
+        };
+
+    private static JsonArray Pairs(IEnumerable<(string Name, string Value)> pairs) =>
+        Array(pairs.Select(pair => new JsonObject { ["name"] = pair.Name, ["value"] = pair.Value }));
+
+    private static JsonArray Array(IEnumerable<JsonNode?> nodes) => new([.. nodes]);
+}
