@@ -25,7 +25,7 @@ internal static class CompilerMends
     private static string NearNames(Diagnostic diagnostic, CSharpCompilation compilation)
     {
         var root = diagnostic.Location.SourceTree!.GetRoot();
-        if (root.FindNode(diagnostic.Location.SourceSpan) is not SimpleNameSyntax name)
+        if (root.FindNode(diagnostic.Location.SourceSpan, getInnermostNodeForTie: true) is not SimpleNameSyntax name)
         {
             return "";
         }

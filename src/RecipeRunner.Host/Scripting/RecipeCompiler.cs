@@ -34,6 +34,7 @@ public static class RecipeCompiler
         var options = new EmitOptions(debugInformationFormat: DebugInformationFormat.PortablePdb);
         var result = compilation.Emit(image, lines, options: options, cancellationToken: cancellation);
         ThrowWhereRefused(result.Diagnostics, recipe, compilation);
+        ThrowWhereEmpty(recipe, compilation);
         var entry = compilation.GetEntryPoint(cancellation)!;
         return new CompiledRecipe(
             recipe,
@@ -93,6 +94,21 @@ public static class RecipeCompiler
             .Concat(libraries)
             .Distinct(StringComparer.Ordinal)
             .Select(path => MetadataReference.CreateFromFile(path));
+    }
+
+    private static void ThrowWhereEmpty(RecipeText recipe, CSharpCompilation compilation)
+    {
+        if (!compilation.SyntaxTrees.Any(tree => tree.GetRoot().ChildNodes().Any()))
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0103",
+                    new Place(recipe.ShownFolder + recipe.FileName),
+                    "The recipe says nothing to do.",
+                    "A recipe reads data, weighs, and emits; `recipe-runner steps` lists what it can say."
+                )
+            );
+        }
     }
 
     private static void ThrowWhereRefused(

@@ -2,6 +2,7 @@ using System.Text.Json.Nodes;
 using NodaTime;
 using NodaTime.Text;
 using RecipeRunner.Host.Running;
+using RecipeRunner.Host.Summarising;
 
 namespace RecipeRunner.Host.Sealing;
 
@@ -11,6 +12,7 @@ internal static class StudyWriter
     public static void Write(StudyRecord record, string payload, Instant started, Duration elapsed)
     {
         JsonFile.Write(Path.Combine(payload, "audit.json"), AuditDocument.Of(record));
+        File.WriteAllText(Path.Combine(payload, "summary.html"), SummaryPage.Of(record));
         JsonFile.Write(Path.Combine(payload, "ro-crate-metadata.json"), Crate.Of(record));
         JsonFile.Write(Path.Combine(payload, "run.json"), Circumstances(started, elapsed));
     }

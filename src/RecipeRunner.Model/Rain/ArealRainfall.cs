@@ -121,6 +121,7 @@ public sealed class ArealRainfall : Artifact, ITabular
         Column.OfNumbers(
             basin.Id,
             "mm",
+            6,
             $"Mean areal rainfall of {basin.Name}; blank where withheld",
             Enumerable.Range(0, Labels.Length).Select(t => Depth(At(t, b)))
         );

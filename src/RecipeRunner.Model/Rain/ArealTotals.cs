@@ -60,6 +60,7 @@ public sealed class ArealTotals : Artifact, ITabular
                     Column.OfNumbers(
                         basin.Id,
                         "mm",
+                        6,
                         $"Total areal rainfall of {basin.Name}; blank where withheld",
                         Enumerable.Range(0, Starts.Length).Select(p => At(p, b).DepthMillimetres)
                     )

@@ -37,12 +37,14 @@ public sealed class CoverageTable : Artifact, ITabular
             Column.OfNumbers(
                 "weight_reporting",
                 "",
+                12,
                 "Share of the basin's weight in the full network that reported, 0 to 1",
                 rows.Select(row => (double?)row.Value.WeightReporting)
             ),
             Column.OfNumbers(
                 "nearest_reporting_km",
                 "km",
+                3,
                 "Distance from the basin (0 inside) to the nearest reporting gauge",
                 rows.Select(row => row.Value.NearestReportingMetres / 1000)
             ),

@@ -63,6 +63,7 @@ public sealed class BasinLayer : Artifact, IMapLayer
                     Column.OfNumbers(
                         "area_km2",
                         "km²",
+                        6,
                         "Area in the working grid",
                         Basins.Select(basin => (double?)basin.Shape.Area / 1e6)
                     ),

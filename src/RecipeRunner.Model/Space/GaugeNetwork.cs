@@ -41,7 +41,16 @@ public sealed class GaugeNetwork : Artifact, IMapLayer
     {
         var ids = Column.OfText("gauge", "Gauge id", Gauges.Select(gauge => gauge.Id));
         var elevations = Gauges.Any(gauge => gauge.ElevationMetres.HasValue)
-            ? [Column.OfNumbers("elev_m", "m", "Height above sea level", Gauges.Select(gauge => gauge.ElevationMetres))]
+            ?
+            [
+                Column.OfNumbers(
+                    "elev_m",
+                    "m",
+                    3,
+                    "Height above sea level",
+                    Gauges.Select(gauge => gauge.ElevationMetres)
+                ),
+            ]
             : ImmutableArray<Column>.Empty;
         return new FeatureTable(
             GeometryKind.Point,

@@ -39,6 +39,7 @@ public sealed class PieceLayer : Artifact, IMapLayer
                 Column.OfNumbers(
                     "area_m2",
                     "m²",
+                    4,
                     "Area in the working grid",
                     Pieces.Select(piece => (double?)piece.Shape.Area)
                 ),

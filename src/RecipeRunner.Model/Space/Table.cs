@@ -23,6 +23,7 @@ public sealed class Column
         string unit,
         string meaning,
         ColumnKind kind,
+        int decimals,
         ImmutableArray<string> texts,
         ImmutableArray<double?> numbers
     )
@@ -31,6 +32,7 @@ public sealed class Column
         Unit = unit;
         Meaning = meaning;
         Kind = kind;
+        Decimals = decimals;
         Texts = texts;
         Numbers = numbers;
     }
@@ -47,6 +49,9 @@ public sealed class Column
     /// <summary>What its cells hold.</summary>
     public ColumnKind Kind { get; }
 
+    /// <summary>The most digits that are written after the decimal point of a number, 0 to 15.</summary>
+    public int Decimals { get; }
+
     /// <summary>The cells of a text column; empty otherwise.</summary>
     public ImmutableArray<string> Texts { get; }
 
@@ -58,15 +63,25 @@ public sealed class Column
 
     /// <summary>A column of text.</summary>
     public static Column OfText(string name, string meaning, IEnumerable<string> cells) =>
-        new(name, "", meaning, ColumnKind.Text, [.. cells], []);
+        new(name, "", meaning, ColumnKind.Text, 0, [.. cells], []);
 
     /// <summary>A column of numbers; null is blank.</summary>
-    public static Column OfNumbers(string name, string unit, string meaning, IEnumerable<double?> cells) =>
-        new(name, unit, meaning, ColumnKind.Number, [], [.. cells]);
+    /// <param name="name">The name in the file's header.</param>
+    /// <param name="unit">The unit; empty for none.</param>
+    /// <param name="decimals">The most digits to write after the decimal point, 0 to 15.</param>
+    /// <param name="meaning">What the column says.</param>
+    /// <param name="cells">The cells.</param>
+    public static Column OfNumbers(
+        string name,
+        string unit,
+        int decimals,
+        string meaning,
+        IEnumerable<double?> cells
+    ) => new(name, unit, meaning, ColumnKind.Number, decimals, [], [.. cells]);
 
     /// <summary>A column of whole numbers.</summary>
     public static Column OfCounts(string name, string unit, string meaning, IEnumerable<int> cells) =>
-        new(name, unit, meaning, ColumnKind.Count, [], [.. cells.Select(cell => (double?)cell)]);
+        new(name, unit, meaning, ColumnKind.Count, 0, [], [.. cells.Select(cell => (double?)cell)]);
 }
 
 /// <summary>Columns of the same length.</summary>

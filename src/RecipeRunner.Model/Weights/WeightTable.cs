@@ -43,12 +43,14 @@ public sealed class WeightTable : Artifact, ITabular
             Column.OfNumbers(
                 "area_m2",
                 "m²",
+                4,
                 "Area of the basin nearest to the gauge, in the working grid",
                 Weights.Select(w => (double?)w.AreaSquareMetres)
             ),
             Column.OfNumbers(
                 "weight",
                 "",
+                15,
                 "That area over the basin's; a basin's weights sum to 1",
                 Weights.Select(w => (double?)w.Share)
             ),

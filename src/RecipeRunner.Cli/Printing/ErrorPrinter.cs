@@ -1,0 +1,85 @@
+using System.Collections.Immutable;
+using RecipeRunner.Cli.Commands;
+using RecipeRunner.Host.Scripting;
+using RecipeRunner.Model.Steps;
+using Spectre.Console;
+
+namespace RecipeRunner.Cli.Printing;
+
+/// <summary>Prints what went wrong, with the recipe line, and says that nothing was written.</summary>
+internal static class ErrorPrinter
+{
+    /// <summary>Does some work and turns what is refused into printed errors and an exit code.</summary>
+    public static int Guard(Screen screen, bool details, Action work, Action interrupted)
+    {
+        try
+        {
+            work();
+            return ExitCode.Done;
+        }
+        catch (RecipeException refused)
+        {
+            interrupted();
+            Print(screen, refused.Problems);
+            return Close(screen, details, refused);
+        }
+        catch (RefusedException refused)
+        {
+            interrupted();
+            Print(screen, [.. refused.Problems.Select(problem => new RecipeProblem(problem, null, "", 0))]);
+            return Close(screen, details, refused);
+        }
+    }
+
+    private static int Close(Screen screen, bool details, Exception failure)
+    {
+        screen.Error("nothing was written");
+        if (details)
+        {
+            screen.Error(failure.ToString());
+        }
+
+        return ExitCode.Failed;
+    }
+
+    private static void Print(Screen screen, ImmutableArray<RecipeProblem> problems)
+    {
+        RecipeLine? shown = null;
+        foreach (var problem in problems)
+        {
+            var line = problem.Line is { } at ? FormattableString.Invariant($"{at.File}({at.Line},{at.Column}): ") : "";
+            var where = problem.Problem.Where.ToString();
+            screen.Error(
+                $"{line}error {problem.Problem.Code}: {(where.Length > 0 ? where + ": " : "")}{problem.Problem.What}",
+                Color.Red
+            );
+            if (problem.Line != shown)
+            {
+                PrintSource(screen, problem);
+            }
+
+            shown = problem.Line;
+            if (problem.Problem.Mend.Length > 0)
+            {
+                screen.Error($"   {problem.Problem.Mend}");
+            }
+        }
+    }
+
+    private static void PrintSource(Screen screen, RecipeProblem problem)
+    {
+        if (problem.Line is not { } line || problem.Source.Length == 0)
+        {
+            return;
+        }
+
+        var number = FormattableString.Invariant($"{line.Line}").PadLeft(4);
+        var source = problem.Source.Replace('\t', ' ');
+        screen.Error($"{number} | {source}");
+        if (line.Column > 0)
+        {
+            var length = Math.Clamp(problem.Length, 1, Math.Max(1, source.Length - line.Column + 1));
+            screen.Error($"     | {new string(' ', line.Column - 1)}{new string('^', length)}");
+        }
+    }
+}

@@ -1,0 +1,98 @@
+using System.Collections.Immutable;
+using System.Reflection;
+using System.Runtime.CompilerServices;
+using System.Xml.Linq;
+using RecipeRunner.Host.Scripting;
+using RecipeRunner.Model.Steps;
+
+namespace RecipeRunner.Host.Catalogue;
+
+/// <summary>The verbs of a recipe language, told by the doc comments of its step libraries.</summary>
+public sealed class VerbCatalogue
+{
+    private const BindingFlags Declared = BindingFlags.Public | BindingFlags.DeclaredOnly;
+    private readonly DocComments comments;
+    private readonly ImmutableArray<Assembly> libraries;
+
+    private VerbCatalogue(RecipeLanguage language)
+    {
+        libraries = [.. language.StepLibraries.Append(language.VerbsType.Assembly).Distinct()];
+        comments = new DocComments(libraries.Append(typeof(IStudy).Assembly));
+        var top = language
+            .VerbsType.GetMethods(Declared | BindingFlags.Instance)
+            .Where(method => !method.IsSpecialName);
+        var extensions = libraries
+            .SelectMany(library => library.GetExportedTypes())
+            .Where(type => type.IsAbstract && type.IsSealed)
+            .SelectMany(type => type.GetMethods(Declared | BindingFlags.Static))
+            .Where(method => method.IsDefined(typeof(ExtensionAttribute), inherit: false));
+        Verbs =
+        [
+            .. top.Concat(extensions)
+                .Select(EntryOf)
+                .OrderBy(verb => verb.Room, StringComparer.Ordinal)
+                .ThenBy(verb => verb.Name, StringComparer.Ordinal)
+                .ThenBy(verb => verb.Signature, StringComparer.Ordinal),
+        ];
+    }
+
+    /// <summary>The verbs, by room and name.</summary>
+    public ImmutableArray<VerbEntry> Verbs { get; }
+
+    /// <summary>The catalogue of a language.</summary>
+    public static VerbCatalogue Of(RecipeLanguage language) => new(language);
+
+    private VerbEntry EntryOf(MethodInfo method)
+    {
+        var own = comments.Of(method);
+        var stepName = DocComments.Inherited(own);
+        var step = stepName is null
+            ? null
+            : libraries.Select(library => library.GetType(stepName)).FirstOrDefault(type => type is not null);
+        var told = stepName is null ? own : comments.OfType(stepName);
+        return new VerbEntry(
+            method.Name,
+            step?.Namespace is { } space ? space[(space.LastIndexOf('.') + 1)..] : "Study",
+            SignatureText.Of(method),
+            DocComments.Text(told?.Element("summary")),
+            [.. method.GetParameters().Select(parameter => ParameterOf(parameter, own))],
+            step?.GetCustomAttribute<StepAttribute>()?.Source ?? "",
+            DocComments.Text(told?.Element("example"))
+        );
+    }
+
+    private static VerbParameter ParameterOf(ParameterInfo parameter, XElement? own)
+    {
+        var told = own
+            ?.Elements("param")
+            .FirstOrDefault(element =>
+                string.Equals(element.Attribute("name")?.Value, parameter.Name, StringComparison.Ordinal)
+            );
+        return new VerbParameter(
+            parameter.Name!,
+            DocComments.Text(told),
+            Choices(Nullable.GetUnderlyingType(parameter.ParameterType) ?? parameter.ParameterType)
+        );
+    }
+
+    private static ImmutableArray<string> Choices(Type type)
+    {
+        if (type.IsEnum)
+        {
+            return [.. Enum.GetNames(type).Select(name => $"{type.Name}.{name}")];
+        }
+
+        if (!type.IsAssignableTo(typeof(ISettingValue)))
+        {
+            return [];
+        }
+
+        var values = type.GetProperties(Declared | BindingFlags.Static)
+            .Where(property => property.PropertyType == type)
+            .Select(property => $"{type.Name}.{property.Name}");
+        var makers = type.GetMethods(Declared | BindingFlags.Static)
+            .Where(method => method.ReturnType == type && !method.IsSpecialName)
+            .Select(method => $"{type.Name}.{method.Name}(…)");
+        return [.. values.Concat(makers)];
+    }
+}

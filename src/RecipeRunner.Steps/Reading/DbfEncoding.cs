@@ -1,0 +1,102 @@
+using System.Text;
+using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
+
+namespace RecipeRunner.Steps.Reading;
+
+/// <summary>
+/// Finds the text encoding of an attribute file: what its <c>.cpg</c> says, else its language byte, else UTF-8 where all
+/// of it is valid UTF-8, else Windows-1252 (common practice, no source).
+/// </summary>
+internal static class DbfEncoding
+{
+    private const int LanguageByte = 29;
+
+    private static readonly Dictionary<byte, int> Languages = new()
+    {
+        [0x01] = 437,
+        [0x02] = 850,
+        [0x03] = 1252,
+        [0x57] = 1252,
+        [0x58] = 1252,
+        [0x59] = 1252,
+        [0x64] = 852,
+        [0x65] = 866,
+        [0x6B] = 857,
+        [0x87] = 852,
+        [0x88] = 857,
+        [0xC8] = 1250,
+        [0xC9] = 1251,
+        [0xCA] = 1254,
+        [0xCB] = 1253,
+    };
+
+    /// <summary>The encoding.</summary>
+    /// <param name="name">The shapefile.</param>
+    /// <param name="dbf">Its attribute file.</param>
+    /// <param name="cpg">The text of its <c>.cpg</c>; null where there is none.</param>
+    /// <exception cref="RefusedException">The <c>.cpg</c> names no known encoding, or the text does not fit UTF-8 that it names.</exception>
+    public static Encoding Find(string name, byte[] dbf, string? cpg)
+    {
+        Encoding.RegisterProvider(CodePagesEncodingProvider.Instance);
+        if (cpg is not null)
+        {
+            return Stated(name, dbf, cpg.Trim('\uFEFF', ' ', '\r', '\n', '\t', '\0'));
+        }
+
+        if (Languages.TryGetValue(dbf[LanguageByte], out var page))
+        {
+            return Encoding.GetEncoding(page);
+        }
+
+        return System.Text.Unicode.Utf8.IsValid(Rows(dbf)) ? Encoding.UTF8 : Encoding.GetEncoding(1252);
+    }
+
+    private static Encoding Stated(string name, byte[] dbf, string label)
+    {
+        var encoding =
+            Named(label)
+            ?? throw new RefusedException(
+                Finding.Error(
+                    "RR0215",
+                    new Place(name[..^3] + "cpg"),
+                    $"It names the encoding '{label}', which is not known.",
+                    $"{NearWords.Mend(label, ["UTF-8", "1252", "ISO-8859-1"])} Write UTF-8 or the number of a code page, such as 1252.".TrimStart()
+                )
+            );
+        if (encoding is UTF8Encoding && !System.Text.Unicode.Utf8.IsValid(Rows(dbf)))
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0216",
+                    new Place(name[..^3] + "dbf"),
+                    "Its .cpg says UTF-8, but the text is not.",
+                    "Write the true encoding into the .cpg; 1252 is common."
+                )
+            );
+        }
+
+        return encoding;
+    }
+
+    private static Encoding? Named(string label)
+    {
+        var digits =
+            label.StartsWith("ANSI ", StringComparison.OrdinalIgnoreCase) ? label[5..]
+            : label.StartsWith("CP", StringComparison.OrdinalIgnoreCase) ? label[2..].TrimStart('-')
+            : label;
+        digits = digits.StartsWith("8859", StringComparison.Ordinal)
+            ? "iso-" + (digits.Length > 4 && digits[4] != '-' ? digits.Insert(4, "-") : digits)
+            : digits;
+        var known = Encoding.GetEncodings().Concat(CodePagesEncodingProvider.Instance.GetEncodings());
+        var match = known.FirstOrDefault(info =>
+            string.Equals(info.Name, digits, StringComparison.OrdinalIgnoreCase)
+            || string.Equals(info.Name, label, StringComparison.OrdinalIgnoreCase)
+            || string.Equals(FormattableString.Invariant($"{info.CodePage}"), digits, StringComparison.Ordinal)
+        );
+        return string.Equals(label, "UTF8", StringComparison.OrdinalIgnoreCase) ? Encoding.UTF8 : match?.GetEncoding();
+    }
+
+    private static ReadOnlySpan<byte> Rows(byte[] dbf) =>
+        dbf.AsSpan(System.Buffers.Binary.BinaryPrimitives.ReadUInt16LittleEndian(dbf.AsSpan(8)));
+}

@@ -1,0 +1,91 @@
+using System.Collections.Immutable;
+using System.Globalization;
+using System.Text;
+using NetTopologySuite.IO.Esri;
+using NetTopologySuite.IO.Esri.Shapefiles.Readers;
+using RecipeRunner.Model.Space;
+using RecipeRunner.Model.Steps;
+using RecipeRunner.Steps.Referencing;
+using RecipeRunner.Steps.Shapes;
+
+namespace RecipeRunner.Steps.Reading;
+
+/// <summary>
+/// Reads a shapefile (ESRI Shapefile Technical Description, 1998). Its files are checked against their own headers and
+/// against each other first, because the library that reads them takes cut files for whole ones.
+/// </summary>
+internal static class ShapefileSource
+{
+    /// <summary>Reads all features.</summary>
+    /// <exception cref="RefusedException">A part is missing, cut, or does not fit the others.</exception>
+    public static FeatureFile Read(StepContext context, string name)
+    {
+        var stem = name[..^4];
+        var shp = ReadAll(context, name);
+        var shx = ReadAll(context, Sibling(context, stem, "shx", name));
+        var dbf = ReadAll(context, Sibling(context, stem, "dbf", name));
+        ShapefileCheck.Require(name, shp, shx, dbf);
+        var encoding = DbfEncoding.Find(name, dbf, TextOf(context, stem, "cpg"));
+        var system = TextOf(context, stem, "prj") is { } prj ? PrjReader.Match(prj, stem + ".prj") : null;
+        var options = new ShapefileReaderOptions
+        {
+            Encoding = encoding,
+            Factory = RegionGeometry.Factory,
+            GeometryBuilderMode = GeometryBuilderMode.IgnoreInvalidShapes,
+        };
+        using var reader = Shapefile.OpenRead(new MemoryStream(shp), new MemoryStream(dbf), options);
+        var fields = reader.Fields.Select(field => field.Name).ToImmutableArray();
+        var features = ImmutableArray.CreateBuilder<FileFeature>();
+        for (var number = 1; reader.Read(out var deleted); number++)
+        {
+            context.Cancellation.ThrowIfCancellationRequested();
+            if (!deleted)
+            {
+                var geometry = reader.Geometry is { IsEmpty: false } shape ? shape.Copy() : null;
+                features.Add(
+                    new FileFeature(number, geometry, [.. reader.Fields.Select(field => TextOf(field.Value))])
+                );
+            }
+        }
+
+        return new FeatureFile(name, fields, features.ToImmutable(), system);
+    }
+
+    private static string TextOf(object? value) =>
+        value switch
+        {
+            null => "",
+            string text => text.Trim(),
+            double number => number.ToString("R", CultureInfo.InvariantCulture),
+            IFormattable other => other.ToString(null, CultureInfo.InvariantCulture),
+            _ => value.ToString() ?? "",
+        };
+
+    private static string Sibling(StepContext context, string stem, string ending, string name) =>
+        Found(context, stem, ending)
+        ?? throw new RefusedException(
+            Finding.Error(
+                "RR0210",
+                new Place(name),
+                $"The shapefile lacks its .{ending} file.",
+                $"A shapefile is at least three files; copy {stem}.{ending} beside it."
+            )
+        );
+
+    private static string? TextOf(StepContext context, string stem, string ending) =>
+        Found(context, stem, ending) is { } sibling ? Encoding.UTF8.GetString(ReadAll(context, sibling)) : null;
+
+    private static string? Found(StepContext context, string stem, string ending)
+    {
+        string[] names = [$"{stem}.{ending}", $"{stem}.{ending.ToUpperInvariant()}"];
+        return names.FirstOrDefault(context.InputExists);
+    }
+
+    private static byte[] ReadAll(StepContext context, string name)
+    {
+        using var stream = context.OpenInput(name);
+        var bytes = new byte[stream.Length];
+        stream.ReadExactly(bytes);
+        return bytes;
+    }
+}

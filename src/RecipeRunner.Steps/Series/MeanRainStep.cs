@@ -1,0 +1,114 @@
+using RecipeRunner.Model.Rain;
+using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Weights;
+
+namespace RecipeRunner.Steps.Series;
+
+/// <summary>
+/// Computes mean areal rainfall: at every step, each basin's depths weighted. Where gauges are missing the gap policy
+/// says what to do; below the threshold the value is withheld, not guessed.
+/// </summary>
+/// <param name="Weights">Weights of the full network.</param>
+/// <param name="Rain">Gauge records.</param>
+/// <param name="Gaps">What to do where a gauge is missing.</param>
+/// <param name="Reporting">The share of a basin's weight in the full network that must report.</param>
+/// <example><code>var areal = weights.MeanRain(rain, gaps: GapPolicy.Redraw, reporting: AtLeast.Percent(60));</code></example>
+[Step("Mean rain", Word = "rain", Source = "Thiessen 1911, doi:10.1175/1520-0493(1911)39<1082b:PAFLA>2.0.CO;2")]
+public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPolicy Gaps, AtLeast Reporting)
+    : Step<ArealRainfall>
+{
+    /// <inheritdoc/>
+    public override ArealRainfall Execute(StepContext context)
+    {
+        var network = Weights.Cells.Gauges;
+        var columns = RecordColumns.Match(context, network, Rain);
+        var calculation = new ArealCalculation(Weights, Gaps, Reporting);
+        var basins = Weights.Basins.Basins.Length;
+        var values = new ArealValue[Rain.Labels.Length * basins];
+        var (depths, reports) = (new double[columns.Length], new bool[columns.Length]);
+        for (var t = 0; t < Rain.Labels.Length; t++)
+        {
+            context.Cancellation.ThrowIfCancellationRequested();
+            context.Progress((double)t / Rain.Labels.Length);
+            Gather(t, columns, depths, reports);
+            calculation.Compute(depths, reports, values.AsSpan(t * basins, basins));
+        }
+
+        var areal = new ArealRainfall(Weights.Basins, Rain.Step, Rain.Labels, values);
+        context.Assume(PolicyWords());
+        context.Assume("A missing value is not zero: it is left out, as the gap policy says.");
+        TellOfWithheld(context, areal);
+        return areal;
+    }
+
+    private void Gather(int t, int[] columns, double[] depths, bool[] reports)
+    {
+        var (row, statuses) = (Rain.DepthsAt(t), Rain.StatusesAt(t));
+        for (var gauge = 0; gauge < columns.Length; gauge++)
+        {
+            var column = columns[gauge];
+            reports[gauge] = column >= 0 && statuses[column] != RecordStatus.Missing;
+            depths[gauge] = reports[gauge] ? row[column] : 0;
+        }
+    }
+
+    private string PolicyWords() =>
+        Gaps switch
+        {
+            GapPolicy.Redraw =>
+                $"Where a gauge is missing, cells are drawn anew from the gauges that report; {Reporting.ToSettingText()} of a basin's weight must report.",
+            GapPolicy.Rescale =>
+                $"Where a gauge is missing, the weights of the others are scaled up to sum to 1; {Reporting.ToSettingText()} of a basin's weight must report.",
+            _ => "Where a gauge with weight is missing, the value is withheld.",
+        };
+
+    private void TellOfWithheld(StepContext context, ArealRainfall areal)
+    {
+        for (var b = 0; b < areal.Basins.Basins.Length; b++)
+        {
+            var withheld = Enumerable
+                .Range(0, areal.Labels.Length)
+                .Count(t => areal.At(t, b).Status == ArealStatus.Withheld);
+            if (withheld == areal.Labels.Length)
+            {
+                context.Find(
+                    Finding.Caution(
+                        "RR0513",
+                        Place.Of($"basin {areal.Basins.Basins[b].Id}"),
+                        "Every value is withheld.",
+                        "Too few gauges report; see the coverage table."
+                    )
+                );
+            }
+            else if (withheld > 0)
+            {
+                context.Find(
+                    Finding.Notice(
+                        "RR0514",
+                        Place.Of($"basin {areal.Basins.Basins[b].Id}"),
+                        FormattableString.Invariant(
+                            $"{withheld} of {areal.Labels.Length} values are withheld for want of gauges."
+                        ),
+                        ""
+                    )
+                );
+            }
+        }
+    }
+}
+
+/// <summary>The verb for <see cref="MeanRainStep"/>.</summary>
+public static class MeanRainVerb
+{
+    /// <inheritdoc cref="MeanRainStep"/>
+    /// <param name="weights">Weights of the full network.</param>
+    /// <param name="rain">Gauge records.</param>
+    /// <param name="gaps">What to do where a gauge is missing.</param>
+    /// <param name="reporting">The share of a basin's weight that must report; any share where not given.</param>
+    public static ArealRainfall MeanRain(
+        this WeightTable weights,
+        RainRecords rain,
+        GapPolicy gaps,
+        AtLeast? reporting = null
+    ) => weights.Run(new MeanRainStep(weights, rain, gaps, reporting ?? AtLeast.Percent(0)));
+}

@@ -1,0 +1,130 @@
+using System.Collections.Immutable;
+using System.Globalization;
+using NodaTime;
+using RecipeRunner.Model.Rain;
+using RecipeRunner.Model.Space;
+using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Time;
+
+namespace RecipeRunner.Steps.Series;
+
+/// <summary>
+/// Sums areal rainfall over months, years, water years or the whole record. A period in which too few of the steps that
+/// the calendar expects have a value is withheld; where some are missing the sum is of those that are there, and a
+/// finding says so.
+/// </summary>
+/// <param name="Areal">Mean areal rainfall.</param>
+/// <param name="Period">What to sum over: <c>Every.Month</c>, <c>Every.WaterYear(firstMonth: 10)</c>…</param>
+/// <param name="Complete">The share of expected steps that must have a value; all of them where not given.</param>
+/// <example><code>var yearly = areal.Total(Every.WaterYear(firstMonth: 10), complete: AtLeast.Percent(95));</code></example>
+[Step("Total", Word = "total")]
+public sealed record TotalStep(ArealRainfall Areal, Every Period, AtLeast Complete) : Step<ArealTotals>
+{
+    /// <inheritdoc/>
+    public override ArealTotals Execute(StepContext context)
+    {
+        if (Areal.Labels.IsEmpty)
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0504",
+                    Place.Of("areal rainfall"),
+                    "There are no steps to sum.",
+                    "Check the span of the records."
+                )
+            );
+        }
+
+        var starts = Areal.Labels.Select(StartOf).Distinct().ToImmutableArray();
+        var steps = Areal
+            .Labels.Select((label, t) => (Start: StartOf(label), t))
+            .ToLookup(pair => pair.Start, pair => pair.t);
+        var basins = Areal.Basins.Basins.Length;
+        var totals = starts
+            .SelectMany(start =>
+                Enumerable.Range(0, basins).Select(basin => TotalOf(basin, steps[start], ExpectedFrom(start)))
+            )
+            .ToArray();
+        context.Assume("A step's rain belongs to the period that holds the date under which it is recorded.");
+        TellOfShortSums(context, totals);
+        return new ArealTotals(Areal.Basins, Period, starts, totals);
+    }
+
+    private LocalDate StartOf(LocalDate label) => Period.StartOf(label, Areal.Labels[0]);
+
+    private int ExpectedFrom(LocalDate start)
+    {
+        var end = Period.EndOf(start, Areal.Step.Next(Areal.Labels[^1]));
+        var count = 0;
+        for (var label = start; label < end; label = Areal.Step.Next(label))
+        {
+            count++;
+        }
+
+        return count;
+    }
+
+    private ArealTotal TotalOf(int basin, IEnumerable<int> steps, int expected)
+    {
+        var sum = default(SteadySum);
+        var present = 0;
+        foreach (
+            var value in steps.Select(t => Areal.At(t, basin)).Where(value => value.Status != ArealStatus.Withheld)
+        )
+        {
+            sum.Add(value.DepthMillimetres);
+            present++;
+        }
+
+        var enough = present > 0 && Complete.IsMetBy((double)present / expected);
+        return new ArealTotal(enough ? sum.Value : null, present, expected);
+    }
+
+    private void TellOfShortSums(StepContext context, ArealTotal[] totals)
+    {
+        var shorts = totals.Count(total =>
+            total.DepthMillimetres is not null && total.StepsWithValue < total.StepsExpected
+        );
+        if (shorts > 0)
+        {
+            context.Find(
+                Finding.Caution(
+                    "RR0505",
+                    Place.Of("totals"),
+                    string.Create(
+                        CultureInfo.InvariantCulture,
+                        $"{shorts} totals leave out steps without a value, so they may be too low."
+                    ),
+                    "Ask for complete: AtLeast.Percent(100) to withhold them."
+                )
+            );
+        }
+
+        var withheld = totals.Count(total => total.DepthMillimetres is null);
+        if (withheld > 0)
+        {
+            context.Find(
+                Finding.Notice(
+                    "RR0506",
+                    Place.Of("totals"),
+                    string.Create(
+                        CultureInfo.InvariantCulture,
+                        $"{withheld} of {totals.Length} totals are withheld: {Complete.ToSettingText()} of their steps must have a value."
+                    ),
+                    "The record may begin or end within a period, or values were withheld for want of gauges."
+                )
+            );
+        }
+    }
+}
+
+/// <summary>The verb for <see cref="TotalStep"/>.</summary>
+public static class TotalVerb
+{
+    /// <inheritdoc cref="TotalStep"/>
+    /// <param name="areal">Mean areal rainfall.</param>
+    /// <param name="period">What to sum over; the whole record where not given.</param>
+    /// <param name="complete">The share of expected steps that must have a value; all of them where not given.</param>
+    public static ArealTotals Total(this ArealRainfall areal, Every? period = null, AtLeast? complete = null) =>
+        areal.Run(new TotalStep(areal, period ?? Every.WholeRecord, complete ?? AtLeast.Percent(100)));
+}
