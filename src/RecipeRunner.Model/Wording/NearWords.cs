@@ -37,20 +37,25 @@ public static class NearWords
             || word.Contains(candidate, StringComparison.OrdinalIgnoreCase)
         );
 
-    /// <summary>The number of letters to insert, drop or change (Levenshtein 1966).</summary>
+    /// <summary>The number of letters to insert, drop, change, or swap with the next (Damerau 1964, doi:10.1145/363958.363994).</summary>
     private static int Distance(string a, string b)
     {
-        var row = Enumerable.Range(0, b.Length + 1).ToArray();
+        var (earlier, row) = (new int[b.Length + 1], Enumerable.Range(0, b.Length + 1).ToArray());
         for (var i = 1; i <= a.Length; i++)
         {
-            var diagonal = row[0];
-            row[0] = i;
+            var next = new int[b.Length + 1];
+            next[0] = i;
             for (var j = 1; j <= b.Length; j++)
             {
-                var change = diagonal + (a[i - 1] == b[j - 1] ? 0 : 1);
-                diagonal = row[j];
-                row[j] = Math.Min(change, Math.Min(row[j], row[j - 1]) + 1);
+                var change = row[j - 1] + (a[i - 1] == b[j - 1] ? 0 : 1);
+                next[j] = Math.Min(change, Math.Min(row[j], next[j - 1]) + 1);
+                if (i > 1 && j > 1 && a[i - 1] == b[j - 2] && a[i - 2] == b[j - 1])
+                {
+                    next[j] = Math.Min(next[j], earlier[j - 2] + 1);
+                }
             }
+
+            (earlier, row) = (row, next);
         }
 
         return row[b.Length];
