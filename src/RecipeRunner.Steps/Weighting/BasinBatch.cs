@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Numerics.Weights;
 
@@ -8,19 +7,22 @@ namespace RecipeRunner.Steps.Weighting;
 internal static class BasinBatch
 {
     /// <summary>The basins as flat arrays, in their layer's order.</summary>
-    public static PolygonBatch Of(ImmutableArray<Basin> basins)
+    public static PolygonBatch Of(IEnumerable<Basin> basins)
     {
-        var batch = new PolygonBatchBuilder();
+        var (x, y) = (new List<double>(), new List<double>());
+        var (ringStarts, basinStarts) = (new List<int> { 0 }, new List<int> { 0 });
         foreach (var basin in basins)
         {
             foreach (var ring in basin.Shape.Rings)
             {
-                batch.AddRing(ring.Vertices.Select(vertex => (vertex.X, vertex.Y)));
+                x.AddRange(ring.Vertices.Select(vertex => vertex.X));
+                y.AddRange(ring.Vertices.Select(vertex => vertex.Y));
+                ringStarts.Add(x.Count);
             }
 
-            batch.CloseBasin();
+            basinStarts.Add(ringStarts.Count - 1);
         }
 
-        return batch.Build();
+        return new PolygonBatch([.. x], [.. y], [.. ringStarts], [.. basinStarts]);
     }
 }

@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Numerics.Cells;
@@ -13,11 +12,21 @@ internal static class NetworkCells
     /// <exception cref="RefusedException">Gauges stand in one place; all of them are named.</exception>
     public static DelaunayTriangulation Triangulate(GaugeNetwork network)
     {
-        RequireDistinct(network);
-        return DelaunayTriangulation.Of(
-            [.. network.Gauges.Select(gauge => gauge.Place.X)],
-            [.. network.Gauges.Select(gauge => gauge.Place.Y)]
-        );
+        try
+        {
+            return DelaunayTriangulation.Of([.. network.Gauges.Select(gauge => gauge.Place.X)], [.. network.Gauges.Select(gauge => gauge.Place.Y)]);
+        }
+        catch (CoincidentSitesException refused)
+        {
+            var problems = new Problems();
+            foreach (var group in refused.Groups)
+            {
+                AddCoincidence(problems, network, [.. group.Select(site => network.Gauges[site])]);
+            }
+
+            problems.ThrowIfAny();
+            throw;
+        }
     }
 
     /// <summary>The cells of a network.</summary>
@@ -28,29 +37,14 @@ internal static class NetworkCells
     public static Region Outline(ThiessenCells cells, int gauge, Frame frame)
     {
         var outline = cells.Outline(gauge, frame);
-        return outline.X.Length < 3
-            ? Region.Empty
-            : Region.OfShell(
-                Enumerable.Range(0, outline.X.Length).Select(i => new Location(outline.X[i], outline.Y[i]))
-            );
+        return outline.IsEmpty ? Region.Empty : Region.OfShell(outline.X.Zip(outline.Y, (x, y) => new Location(x, y)));
     }
 
-    private static void RequireDistinct(GaugeNetwork network)
-    {
-        var problems = new Problems();
-        foreach (var together in network.Gauges.GroupBy(gauge => gauge.Place).Where(group => group.Skip(1).Any()))
-        {
-            var ids = together.Select(gauge => gauge.Id).ToImmutableArray();
-            problems.Add(
-                "RR0402",
-                new Place(network.Source, Item: $"gauges {string.Join(" and ", ids)}"),
-                FormattableString.Invariant(
-                    $"They stand in one place ({together.Key.X:0.###} E, {together.Key.Y:0.###} N), so no line parts their cells."
-                ),
-                $"Correct a coordinate, or leave one out:   .Without(\"{ids[^1]}\")"
-            );
-        }
-
-        problems.ThrowIfAny();
-    }
+    private static void AddCoincidence(Problems problems, GaugeNetwork network, Gauge[] together) =>
+        problems.Add(
+            "RR0402",
+            new Place(network.Source, Item: $"gauges {string.Join(" and ", together.Select(gauge => gauge.Id))}"),
+            FormattableString.Invariant($"They stand in one place ({together[0].Place.X:0.###} E, {together[0].Place.Y:0.###} N), so no line parts their cells."),
+            $"Correct a coordinate, or leave one out:   .Without(\"{together[^1].Id}\")"
+        );
 }

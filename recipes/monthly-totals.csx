@@ -1,0 +1,29 @@
+// How much rain fell on each basin of the invented Quellmark, month by month and by water year?
+//
+//   recipe-runner run recipes/monthly-totals.csx --data data-demo
+//
+// Settings: water-year-starts (10)
+Title("Quellmark: rain by month and water year, 2023 and 2024");
+Note("Invented data for demonstration; nothing here was measured.");
+
+var grid = Crs("EPSG:32633");
+var basins = ReadBasins("basins.shp", id: "BASIN_ID", name: "NAME").To(grid);
+var gauges = ReadGauges("gauges.csv", id: "gauge", x: "lon", y: "lat", elevation: "elev_m", crs: Crs("EPSG:4326")).To(grid);
+var rain = ReadRecords("daily.csv", unit: RainUnit.Millimetres, step: TimeStep.Days(endingAt: "09:00"));
+
+var cells = gauges.ThiessenCells();
+var weights = basins.WeighBy(cells);
+var areal = weights.MeanRain(rain, gaps: GapPolicy.Redraw, reporting: AtLeast.Percent(60));
+
+var byMonth = areal.Total(Every.Month);
+var byWaterYear = areal.Total(Every.WaterYear(firstMonth: Setting("water-year-starts", 10)));
+
+EmitLayer(cells.CutTo(basins), "thiessen-cells");
+EmitLayer(basins.With(areal.Total()), "basins");
+EmitLayer(basins.With(areal.Total()), "basins.geojson");
+EmitLayer(gauges, "gauges");
+EmitTable(weights, "weights");
+EmitTable(areal, "areal-rainfall");
+EmitTable(areal.Coverage(), "coverage");
+EmitTable(byMonth, "rain-by-month");
+EmitTable(byWaterYear, "rain-by-water-year");
