@@ -134,14 +134,14 @@ def silences(days):
             start = rng.randrange(len(days))
             silent[key] |= set(days[start:start + rng.randint(5, 45)])
     silent["Q-13"] |= {d for d in days if d < datetime.date(2023, 6, 12)}
-    silent["Q-18"] |= {d for d in days if d > datetime.date(2024, 9, 3)}
+    silent["Q-18"] |= {d for d in days if d > datetime.date(2024, 7, 3)}
     storm = datetime.date(2024, 1, 9)
     silent["Q-14"] |= {storm + datetime.timedelta(n) for n in range(9)}
     return silent
 
 
 def write_records():
-    first, last = datetime.date(2023, 1, 1), datetime.date(2024, 12, 31)
+    first, last = datetime.date(2022, 10, 1), datetime.date(2024, 9, 30)
     days = [first + datetime.timedelta(n) for n in range((last - first).days + 1)]
     silent = silences(days)
     rows = []

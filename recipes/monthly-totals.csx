@@ -3,7 +3,7 @@
 //   recipe-runner run recipes/monthly-totals.csx --data data-demo
 //
 // Settings: water-year-starts (10)
-Title("Quellmark: rain by month and water year, 2023 and 2024");
+Title("Quellmark: rain by month and water year, October 2022 to September 2024");
 Note("Invented data for demonstration; nothing here was measured.");
 
 var grid = Crs("EPSG:32633");
@@ -13,17 +13,17 @@ var rain = ReadRecords("daily.csv", unit: RainUnit.Millimetres, step: TimeStep.D
 
 var cells = gauges.ThiessenCells();
 var weights = basins.WeighBy(cells);
-var areal = weights.MeanRain(rain, gaps: GapPolicy.Redraw, reporting: AtLeast.Percent(60));
+var areal = weights.MeanRain(rain, gaps: GapPolicy.Redraw, reporting: AtLeast.Percent(40));
 
-var byMonth = areal.Total(Every.Month);
-var byWaterYear = areal.Total(Every.WaterYear(firstMonth: Setting("water-year-starts", 10)));
+var waterYear = Every.WaterYear(firstMonth: Setting("water-year-starts", 10));
+var withTotals = basins.With(areal.Total(complete: AtLeast.Percent(95)));
 
 EmitLayer(cells.CutTo(basins), "thiessen-cells");
-EmitLayer(basins.With(areal.Total()), "basins");
-EmitLayer(basins.With(areal.Total()), "basins.geojson");
+EmitLayer(withTotals, "basins");
+EmitLayer(withTotals, "basins.geojson");
 EmitLayer(gauges, "gauges");
 EmitTable(weights, "weights");
 EmitTable(areal, "areal-rainfall");
 EmitTable(areal.Coverage(), "coverage");
-EmitTable(byMonth, "rain-by-month");
-EmitTable(byWaterYear, "rain-by-water-year");
+EmitTable(areal.Total(Every.Month, complete: AtLeast.Percent(90)), "rain-by-month");
+EmitTable(areal.Total(waterYear, complete: AtLeast.Percent(95)), "rain-by-water-year");

@@ -1,10 +1,10 @@
 // How many wet days did each basin of the invented Quellmark have in one year, and does the way of
 // handling silent gauges matter?
 //
-//   recipe-runner run recipes/wet-days.csx --data data-demo --set year=2023
+//   recipe-runner run recipes/wet-days.csx --data data-demo
 //
 // A loop runs the same weights through every gap policy; plain C# counts the days.
-var year = Setting("year", 2024);
+var year = Setting("year", 2023);
 var wetFrom = Setting("wet-from-mm", 1.0);
 Title($"Quellmark: wet days of {year}");
 Note("Invented data for demonstration; nothing here was measured.");

@@ -1,3 +1,4 @@
+using System.Diagnostics.CodeAnalysis;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
@@ -36,6 +37,7 @@ public sealed class RecipeVerbs
     /// <summary>A reference system by its code in the EPSG registry.</summary>
     /// <param name="code">Such as <c>EPSG:32633</c>.</param>
     /// <exception cref="RefusedException">The code is unknown, or cannot be used safely.</exception>
+    [SuppressMessage("Performance", "CA1822", Justification = "A verb that recipes say without naming a type first.")]
     public ReferenceSystem Crs(string code) => ReferenceSystems.Find(code);
 
     /// <inheritdoc cref="ReadBasinsStep"/>

@@ -16,7 +16,7 @@ internal sealed class CheckCommand(Screen screen) : Command<CheckCommand.Options
         public required string Recipe { get; init; }
     }
 
-    protected override int Execute(CommandContext context, Options settings, CancellationToken cancellationToken) =>
+    public override int Execute(CommandContext context, Options settings, CancellationToken cancellationToken) =>
         ErrorPrinter.Guard(
             screen,
             details: false,

@@ -16,7 +16,7 @@ internal sealed class PeekCommand(Screen screen) : Command<PeekCommand.Options>
         public required string File { get; init; }
     }
 
-    protected override int Execute(CommandContext context, Options settings, CancellationToken cancellationToken) =>
+    public override int Execute(CommandContext context, Options settings, CancellationToken cancellationToken) =>
         ErrorPrinter.Guard(
             screen,
             details: false,

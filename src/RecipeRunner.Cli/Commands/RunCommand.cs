@@ -2,8 +2,6 @@ using System.Collections.Immutable;
 using System.ComponentModel;
 using RecipeRunner.Cli.Printing;
 using RecipeRunner.Host.Running;
-using RecipeRunner.Host.Scripting;
-using RecipeRunner.Model.Steps;
 using Spectre.Console;
 using Spectre.Console.Cli;
 
@@ -67,7 +65,7 @@ internal sealed class RunCommand(Screen screen) : Command<RunCommand.Options>
         private static string NameOf(string text) => text[..text.IndexOf('=', StringComparison.Ordinal)];
     }
 
-    protected override int Execute(CommandContext context, Options settings, CancellationToken cancellationToken)
+    public override int Execute(CommandContext context, Options settings, CancellationToken cancellationToken)
     {
         var request = new RunRequest(
             settings.Recipe,

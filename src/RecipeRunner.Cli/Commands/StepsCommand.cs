@@ -18,7 +18,7 @@ internal sealed class StepsCommand(Screen screen) : Command<StepsCommand.Options
         public string? Name { get; init; }
     }
 
-    protected override int Execute(CommandContext context, Options settings, CancellationToken cancellationToken)
+    public override int Execute(CommandContext context, Options settings, CancellationToken cancellationToken)
     {
         var catalogue = VerbCatalogue.Of(Kitchen.Language);
         return ErrorPrinter.Guard(
@@ -44,7 +44,7 @@ internal sealed class StepsCommand(Screen screen) : Command<StepsCommand.Options
         foreach (var room in catalogue.Verbs.GroupBy(verb => verb.Room, StringComparer.Ordinal))
         {
             screen.Line(room.Key);
-            foreach (var verb in room.DistinctBy(verb => verb.Name))
+            foreach (var verb in room.DistinctBy(verb => verb.Name, StringComparer.Ordinal))
             {
                 screen.Line($"  {verb.Name, -14} {FirstSentence(verb.Summary)}");
             }

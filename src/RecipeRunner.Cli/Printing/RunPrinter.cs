@@ -2,14 +2,13 @@ using System.Diagnostics;
 using System.Globalization;
 using RecipeRunner.Host.Running;
 using RecipeRunner.Host.Summarising;
-using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Cli.Printing;
 
 /// <summary>Prints how a run goes: the title, a line a step, and at the end what a person wants to know.</summary>
 internal sealed class RunPrinter(Screen screen, bool quiet) : IRunObserver
 {
-    private const int WordWidth = 9;
+    private const int WordWidth = 11;
     private const int FileWidth = 15;
     private readonly Stopwatch sinceStep = Stopwatch.StartNew();
     private readonly Stopwatch sinceShown = Stopwatch.StartNew();

@@ -18,7 +18,12 @@ internal static class GeoJsonLayer
 
     /// <summary>Writes the file.</summary>
     /// <returns>Its path.</returns>
-    public static IReadOnlyList<string> Write(StepContext context, string name, FeatureTable features, ReferenceSystem system)
+    public static IReadOnlyList<string> Write(
+        StepContext context,
+        string name,
+        FeatureTable features,
+        ReferenceSystem system
+    )
     {
         var toDegrees = GridTransform.Between(system, ReferenceSystems.Find("EPSG:4326"));
         var path = $"layers/{name}";

@@ -3,7 +3,6 @@ using System.Globalization;
 using System.Text;
 using NetTopologySuite.IO.Esri;
 using NetTopologySuite.IO.Esri.Shapefiles.Readers;
-using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Steps.Referencing;
 using RecipeRunner.Steps.Shapes;

@@ -43,7 +43,8 @@ public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPoli
 
     private void Gather(int t, int[] columns, double[] depths, bool[] reports)
     {
-        var (row, statuses) = (Rain.DepthsAt(t), Rain.StatusesAt(t));
+        var row = Rain.DepthsAt(t);
+        var statuses = Rain.StatusesAt(t);
         for (var gauge = 0; gauge < columns.Length; gauge++)
         {
             var column = columns[gauge];
@@ -62,7 +63,7 @@ public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPoli
             _ => "Where a gauge with weight is missing, the value is withheld.",
         };
 
-    private void TellOfWithheld(StepContext context, ArealRainfall areal)
+    private static void TellOfWithheld(StepContext context, ArealRainfall areal)
     {
         for (var b = 0; b < areal.Basins.Basins.Length; b++)
         {

@@ -2,7 +2,6 @@ using System.Collections.Immutable;
 using System.Globalization;
 using NodaTime;
 using RecipeRunner.Model.Rain;
-using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
 

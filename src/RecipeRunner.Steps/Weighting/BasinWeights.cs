@@ -21,7 +21,9 @@ internal static class BasinWeights
         var weights = ImmutableArray.CreateBuilder<Weight>();
         for (var basin = 0; basin < areas.Count; basin++)
         {
-            var (sites, parts, shares) = (areas.Sites(basin), areas.Areas(basin), areas.Weights(basin));
+            var sites = areas.Sites(basin);
+            var parts = areas.Areas(basin);
+            var shares = areas.Weights(basin);
             for (var i = 0; i < sites.Length; i++)
             {
                 weights.Add(new Weight(basin, sites[i], parts[i], shares[i]));
@@ -42,7 +44,12 @@ internal static class BasinWeights
             var problems = new Problems();
             foreach (var refusal in refused.Refusals)
             {
-                problems.Add("RR0405", new Place(layer.Source, Item: $"basin {layer.Basins[refusal.Polygon].Id}"), $"Its outline {refusal.Reason}.", "Mend the outline, then run again.");
+                problems.Add(
+                    "RR0405",
+                    new Place(layer.Source, Item: $"basin {layer.Basins[refusal.Polygon].Id}"),
+                    $"Its outline {refusal.Reason}.",
+                    "Mend the outline, then run again."
+                );
             }
 
             problems.ThrowIfAny();

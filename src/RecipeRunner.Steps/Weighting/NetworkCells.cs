@@ -14,7 +14,10 @@ internal static class NetworkCells
     {
         try
         {
-            return DelaunayTriangulation.Of([.. network.Gauges.Select(gauge => gauge.Place.X)], [.. network.Gauges.Select(gauge => gauge.Place.Y)]);
+            return DelaunayTriangulation.Of(
+                [.. network.Gauges.Select(gauge => gauge.Place.X)],
+                [.. network.Gauges.Select(gauge => gauge.Place.Y)]
+            );
         }
         catch (CoincidentSitesException refused)
         {
@@ -44,7 +47,9 @@ internal static class NetworkCells
         problems.Add(
             "RR0402",
             new Place(network.Source, Item: $"gauges {string.Join(" and ", together.Select(gauge => gauge.Id))}"),
-            FormattableString.Invariant($"They stand in one place ({together[0].Place.X:0.###} E, {together[0].Place.Y:0.###} N), so no line parts their cells."),
+            FormattableString.Invariant(
+                $"They stand in one place ({together[0].Place.X:0.###} E, {together[0].Place.Y:0.###} N), so no line parts their cells."
+            ),
             $"Correct a coordinate, or leave one out:   .Without(\"{together[^1].Id}\")"
         );
 }

@@ -48,7 +48,13 @@ internal sealed class RedrawnWeights
             }
         }
 
-        var reporting = new GaugeNetwork(live.Select(gauge => network.Gauges[gauge]), network.ReferenceSystem, network.Source);
-        return BasinWeights.Of(NetworkCells.Of(reporting), basins, batch).Select(weight => weight with { Gauge = live[weight.Gauge] });
+        var reporting = new GaugeNetwork(
+            live.Select(gauge => network.Gauges[gauge]),
+            network.ReferenceSystem,
+            network.Source
+        );
+        return BasinWeights
+            .Of(NetworkCells.Of(reporting), basins, batch)
+            .Select(weight => weight with { Gauge = live[weight.Gauge] });
     }
 }

@@ -11,7 +11,7 @@ namespace RecipeRunner.Steps.Weighting;
 /// </summary>
 /// <param name="Gauges">The network, in a projected working grid.</param>
 /// <example><code>EmitLayer(gauges.Triangulate(), "triangles");</code></example>
-[Step("Triangulate", Source = "Delaunay 1934, Sur la sphère vide")]
+[Step("Triangulate", Word = "triangles", Source = "Delaunay 1934, Sur la sphère vide")]
 public sealed record TriangulateStep(GaugeNetwork Gauges) : Step<TriangleLayer>
 {
     /// <inheritdoc/>

@@ -32,8 +32,20 @@ public sealed record WeighByStep(BasinLayer Basins, CellLayer Cells) : Step<Weig
         var unused = Cells.Gauges.Gauges.Where((_, gauge) => !seen.Contains(gauge)).Select(gauge => gauge.Id).ToArray();
         if (unused.Length > 0)
         {
-            var listed = string.Join(", ", unused.Take(8)) + (unused.Length > 8 ? string.Create(CultureInfo.InvariantCulture, $" and {unused.Length - 8} more") : "");
-            context.Find(Finding.Notice("RR0406", new Place(Cells.Gauges.Source), $"No basin reaches into the cells of {listed}: they have no weight while all gauges report."));
+            var listed =
+                string.Join(", ", unused.Take(8))
+                + (
+                    unused.Length > 8
+                        ? string.Create(CultureInfo.InvariantCulture, $" and {unused.Length - 8} more")
+                        : ""
+                );
+            context.Find(
+                Finding.Notice(
+                    "RR0406",
+                    new Place(Cells.Gauges.Source),
+                    $"No basin reaches into the cells of {listed}: they have no weight while all gauges report."
+                )
+            );
         }
     }
 }
@@ -44,5 +56,6 @@ public static class WeighByVerb
     /// <inheritdoc cref="WeighByStep"/>
     /// <param name="basins">The basins, in the cells' working grid.</param>
     /// <param name="cells">The Thiessen cells.</param>
-    public static WeightTable WeighBy(this BasinLayer basins, CellLayer cells) => basins.Run(new WeighByStep(basins, cells));
+    public static WeightTable WeighBy(this BasinLayer basins, CellLayer cells) =>
+        basins.Run(new WeighByStep(basins, cells));
 }
