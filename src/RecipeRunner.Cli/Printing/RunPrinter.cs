@@ -66,17 +66,17 @@ internal sealed class RunPrinter(Screen screen, bool quiet) : IRunObserver
         PrintFindings(outcome.Record);
         foreach (var (name, text) in StudyFacts.Of(outcome.Record))
         {
-            screen.Line($"{name, -9}{text}");
+            screen.Line($"{name, -11}{text}");
         }
 
         var seconds = outcome.Elapsed.TotalSeconds.ToString("0.0", CultureInfo.InvariantCulture);
         screen.Line(
             string.Create(
                 CultureInfo.InvariantCulture,
-                $"study    {outcome.StudyFolder} ({outcome.FileCount} files, sealed), {seconds} s"
+                $"study      {outcome.StudyFolder} ({outcome.FileCount} files, sealed), {seconds} s"
             )
         );
-        screen.Line($"look     {Path.Combine(outcome.StudyFolder, "data", "summary.html")}");
+        screen.Line($"look       {Path.Combine(outcome.StudyFolder, "data", "summary.html")}");
     }
 
     private void PrintFindings(StudyRecord record)
