@@ -1,0 +1,176 @@
+using RecipeRunner.Numerics.Cells;
+
+namespace RecipeRunner.Numerics.Clipping;
+
+/// <summary>
+/// Follows rings through the cells. Most points are touched once and cost a multiplication or two: while the ring stays
+/// within the distance of the nearest wall, measured when it was last looked at, no wall needs to be looked at again.
+/// </summary>
+/// <remarks>
+/// <para>
+/// The walk is a walk over the graph of neighbouring sites, and closes. The areas computed from it add up to the ring's
+/// own whichever way it went; rounding can only shift a wall by what rounding shifts.
+/// </para>
+/// <para>
+/// It ends: a segment with direction d crosses from site a to b only if (b − a)·d is positive, a sign that is computed
+/// exactly, so along a segment no site comes twice.
+/// </para>
+/// </remarks>
+internal sealed class RingWalk(CellGraph graph)
+{
+    public const int NoExit = -1;
+    private const int MostRounds = 4;
+
+    private readonly List<Visit> visits = [];
+    private int site;
+    private double originX;
+    private double originY;
+    private double x;
+    private double y;
+    private double entryX;
+    private double entryY;
+    private double twiceSwept;
+    private double magnitude;
+    private double room;
+
+    /// <summary>The stays of the last ring, in its order; the first and the last are in the same cell.</summary>
+    public List<Visit> Visits => visits;
+
+    /// <summary>Walks a ring; false if rounding keeps the way from closing, as only a ring without an inside can do.</summary>
+    public bool Follow(ReadOnlySpan<double> ringX, ReadOnlySpan<double> ringY)
+    {
+        (originX, originY) = (ringX[0], ringY[0]);
+        Locate();
+        // A start on a wall may be given to one side and, coming round, to the other; then the next round starts there.
+        for (int round = 0; round < MostRounds; round++)
+        {
+            int first = site;
+            Round(ringX, ringY);
+            if (site == first)
+            {
+                return true;
+            }
+        }
+
+        return false;
+    }
+
+    /// <summary>Finds the cell of the ring's first point: from a site near to it, which is in its own cell, by a straight walk.</summary>
+    private void Locate()
+    {
+        site = graph.Sites.NearOnCurve(originX, originY);
+        (x, y) = (graph.Sites.X[site] - originX, graph.Sites.Y[site] - originY);
+        GoTo(0, 0);
+    }
+
+    private void Round(ReadOnlySpan<double> ringX, ReadOnlySpan<double> ringY)
+    {
+        visits.Clear();
+        (x, y) = (0, 0);
+        Enter();
+        double anchorX = 0;
+        double anchorY = 0;
+        double roomSquared = 0;
+        for (int i = 1; i <= ringX.Length; i++)
+        {
+            double toX = i < ringX.Length ? ringX[i] - originX : 0;
+            double toY = i < ringX.Length ? ringY[i] - originY : 0;
+            double fromAnchorX = toX - anchorX;
+            double fromAnchorY = toY - anchorY;
+            if ((fromAnchorX * fromAnchorX) + (fromAnchorY * fromAnchorY) < roomSquared)
+            {
+                Advance(toX, toY);
+                continue;
+            }
+
+            GoTo(toX, toY);
+            (anchorX, anchorY) = (toX, toY);
+            roomSquared = room * room;
+        }
+
+        visits.Add(new Visit(site, NoExit, entryX, entryY, x, y, twiceSwept, magnitude));
+    }
+
+    private void Enter()
+    {
+        (entryX, entryY) = (x, y);
+        twiceSwept = 0;
+        magnitude = 0;
+    }
+
+    private void Advance(double toX, double toY)
+    {
+        double one = (x - entryX) * (toY - entryY);
+        double other = (toX - entryX) * (y - entryY);
+        twiceSwept += one - other;
+        magnitude += Math.Abs(one) + Math.Abs(other);
+        x = toX;
+        y = toY;
+    }
+
+    /// <summary>Goes straight to a point, over as many walls as there are on the way, and measures the room there.</summary>
+    private void GoTo(double toX, double toY)
+    {
+        double directionX = toX - x;
+        double directionY = toY - y;
+        while (true)
+        {
+            int exit = FirstWall(toX, toY, directionX, directionY, out double share);
+            if (exit == NoExit)
+            {
+                Advance(toX, toY);
+                return;
+            }
+
+            Advance(x + (share * (toX - x)), y + (share * (toY - y)));
+            visits.Add(new Visit(site, exit, entryX, entryY, x, y, twiceSwept, magnitude));
+            site = graph.Neighbour[exit];
+            Enter();
+        }
+    }
+
+    /// <summary>
+    /// The wall of the present cell that is crossed first on the way to a point, and at what share of the way; if none is,
+    /// <see cref="NoExit"/>, and <see cref="room"/> is the distance from the point to the nearest wall.
+    /// </summary>
+    private int FirstWall(double toX, double toY, double directionX, double directionY, out double share)
+    {
+        int exit = NoExit;
+        share = double.PositiveInfinity;
+        double nearest = double.PositiveInfinity;
+        for (int slot = graph.Start[site]; slot < graph.Start[site + 1]; slot++)
+        {
+            Wall wall = graph.Walls[slot];
+            double midX = wall.MidX - originX;
+            double midY = wall.MidY - originY;
+            double beyond = ((toX - midX) * wall.NormalX) + ((toY - midY) * wall.NormalY);
+            nearest = Math.Min(nearest, -beyond);
+            if (!(beyond > 0) || !LeadsTo(graph.Neighbour[slot], directionX, directionY))
+            {
+                continue;
+            }
+
+            double before = ((x - midX) * wall.NormalX) + ((y - midY) * wall.NormalY);
+            double at = before < 0 ? before / (before - beyond) : 0;
+            if (at < share)
+            {
+                exit = slot;
+                share = at;
+            }
+        }
+
+        room = Math.Max(0, nearest);
+        return exit;
+    }
+
+    /// <summary>
+    /// Whether a direction leads from the present site's side to a neighbour's: the sign of (b − a)·d, exact as the
+    /// difference of lattice points is, and the sum of two products with Kahan's determinant.
+    /// </summary>
+    private bool LeadsTo(int neighbour, double directionX, double directionY)
+    {
+        double dx = graph.Sites.X[neighbour] - graph.Sites.X[site];
+        double dy = graph.Sites.Y[neighbour] - graph.Sites.Y[site];
+        return Circumcentre.Determinant(dx, -dy, directionY, directionX) > 0;
+    }
+}

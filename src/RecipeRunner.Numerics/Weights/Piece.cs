@@ -1,0 +1,28 @@
+using System.Runtime.InteropServices;
+
+namespace RecipeRunner.Numerics.Weights;
+
+/// <summary>What a ring has in one cell, while it is added up; coordinates relative to the ring's first point.</summary>
+[StructLayout(LayoutKind.Auto)]
+internal struct Piece(int site, double aboutX, double aboutY)
+{
+    /// <summary>Rank of the site whose cell it is.</summary>
+    public int Site { get; } = site;
+
+    /// <summary>The point of the piece about which areas are swept.</summary>
+    public double AboutX { get; } = aboutX;
+
+    /// <summary>The point of the piece about which areas are swept.</summary>
+    public double AboutY { get; } = aboutY;
+
+    public double TwiceArea { get; private set; }
+
+    /// <summary>The sum of the magnitudes that went into <see cref="TwiceArea"/>: what its rounding error is measured by.</summary>
+    public double Magnitude { get; private set; }
+
+    public void Add(double twiceArea, double magnitude)
+    {
+        TwiceArea += twiceArea;
+        Magnitude += magnitude;
+    }
+}

@@ -1,0 +1,41 @@
+using RecipeRunner.Numerics.Weights;
+
+namespace RecipeRunner.Numerics.Tests.Support;
+
+/// <summary>Compares weights with golden ones: 1e-9 absolute, areas 1e-9 of the polygon, the same sites above 1e-9.</summary>
+internal static class GoldenWeights
+{
+    private const double Tolerance = 1e-9;
+
+    public static void ShouldAgree(
+        IEnumerable<(string Polygon, string Site, double Area, double Weight)> golden,
+        string[] polygons,
+        string[] sites,
+        AreaWeights weights
+    )
+    {
+        var expected = golden.ToLookup(row => row.Polygon, StringComparer.Ordinal);
+        double worst = 0;
+        for (int polygon = 0; polygon < polygons.Length; polygon++)
+        {
+            var found = new Dictionary<string, (double Area, double Weight)>(StringComparer.Ordinal);
+            for (int i = 0; i < weights.Sites(polygon).Length; i++)
+            {
+                found[sites[weights.Sites(polygon)[i]]] = (weights.Areas(polygon)[i], weights.Weights(polygon)[i]);
+            }
+
+            found
+                .Where(row => row.Value.Weight > Tolerance)
+                .Select(row => row.Key)
+                .ShouldBe(expected[polygons[polygon]].Select(row => row.Site), ignoreOrder: true);
+            foreach ((_, string site, double area, double weight) in expected[polygons[polygon]])
+            {
+                found[site].Weight.ShouldBe(weight, Tolerance);
+                found[site].Area.ShouldBe(area, Tolerance * weights.PolygonArea(polygon));
+                worst = Math.Max(worst, Math.Abs(found[site].Weight - weight));
+            }
+        }
+
+        TestContext.Current.TestOutputHelper?.WriteLine($"largest difference of a weight: {worst:E2}");
+    }
+}
