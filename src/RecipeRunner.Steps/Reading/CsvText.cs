@@ -9,7 +9,7 @@ internal static class CsvText
 {
     private const int BlockBytes = 1 << 16;
 
-    /// <summary>Opens the table. The header is line 1.</summary>
+    /// <summary>Opens the table before its header, which is line 1.</summary>
     /// <exception cref="RefusedException">It is empty, or not UTF-8.</exception>
     public static SepReader Open(Stream stream, string name)
     {
@@ -31,18 +31,19 @@ internal static class CsvText
                 {
                     Unescape = true,
                     DisableColCountCheck = true,
-                    HasHeader = true,
+                    HasHeader = false,
                     DisableFastFloat = true,
                 }
             )
             .From(stream);
     }
 
-    /// <summary>Column names as the header gives them, without the blanks around them.</summary>
+    /// <summary>Reads the header: column names without the blanks around them. The reader then stands before the first row.</summary>
     /// <exception cref="RefusedException">Two columns have one name.</exception>
     public static string[] Names(SepReader reader, string name)
     {
-        var names = reader.Header.ColNames.Select(column => column.Trim()).ToArray();
+        reader.MoveNext();
+        var names = reader.Current[..].ToStringsArray().Select(column => column.Trim()).ToArray();
         var twins = names
             .Where(column => column.Length > 0)
             .GroupBy(column => column, StringComparer.Ordinal)

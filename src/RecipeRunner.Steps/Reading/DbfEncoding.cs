@@ -81,21 +81,28 @@ internal static class DbfEncoding
 
     private static Encoding? Named(string label)
     {
-        var digits =
-            label.StartsWith("ANSI ", StringComparison.OrdinalIgnoreCase) ? label[5..]
-            : label.StartsWith("CP", StringComparison.OrdinalIgnoreCase) ? label[2..].TrimStart('-')
-            : label;
-        digits = digits.StartsWith("8859", StringComparison.Ordinal)
-            ? "iso-" + (digits.Length > 4 && digits[4] != '-' ? digits.Insert(4, "-") : digits)
-            : digits;
-        var known = Encoding.GetEncodings().Concat(CodePagesEncodingProvider.Instance.GetEncodings());
-        var match = known.FirstOrDefault(info =>
-            string.Equals(info.Name, digits, StringComparison.OrdinalIgnoreCase)
-            || string.Equals(info.Name, label, StringComparison.OrdinalIgnoreCase)
-            || string.Equals(FormattableString.Invariant($"{info.CodePage}"), digits, StringComparison.Ordinal)
-        );
-        return string.Equals(label, "UTF8", StringComparison.OrdinalIgnoreCase) ? Encoding.UTF8 : match?.GetEncoding();
+        var plain = Plain(label.ToLowerInvariant().Replace('_', '-').Replace(' ', '-'));
+        return Encoding
+            .GetEncodings()
+            .Concat(CodePagesEncodingProvider.Instance.GetEncodings())
+            .FirstOrDefault(info =>
+                string.Equals(info.Name, plain, StringComparison.OrdinalIgnoreCase)
+                || string.Equals(FormattableString.Invariant($"{info.CodePage}"), plain, StringComparison.Ordinal)
+            )
+            ?.GetEncoding();
     }
+
+    /// <summary>The registered name or code page number of the ways in which files spell an encoding (common practice, no source).</summary>
+    private static string Plain(string label) =>
+        label switch
+        {
+            "utf8" => "utf-8",
+            _ when label.Contains("8859", StringComparison.Ordinal) => "iso-8859-"
+                + label[(label.IndexOf("8859", StringComparison.Ordinal) + 4)..].TrimStart('-'),
+            _ when label.StartsWith("ansi-", StringComparison.Ordinal) => label["ansi-".Length..],
+            _ when label.StartsWith("cp", StringComparison.Ordinal) => label["cp".Length..].TrimStart('-'),
+            _ => label,
+        };
 
     private static ReadOnlySpan<byte> Rows(byte[] dbf) =>
         dbf.AsSpan(System.Buffers.Binary.BinaryPrimitives.ReadUInt16LittleEndian(dbf.AsSpan(8)));

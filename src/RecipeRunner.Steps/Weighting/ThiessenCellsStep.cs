@@ -19,7 +19,7 @@ public sealed record ThiessenCellsStep(GaugeNetwork Gauges) : Step<CellLayer>
     /// <inheritdoc/>
     public override CellLayer Execute(StepContext context)
     {
-        WorkingGrid.RequireForAreas(Gauges.ReferenceSystem, "Thiessen cells");
+        WorkingGrid.RequireForAreas(Gauges.ReferenceSystem, Gauges.Source, Gauges.Bounds);
         var cells = NetworkCells.Of(Gauges);
         var bounds = Gauges.Bounds;
         var drawn = bounds.Grow(Math.Max(LeastMarginMetres, Math.Max(bounds.Width, bounds.Height) / 2));

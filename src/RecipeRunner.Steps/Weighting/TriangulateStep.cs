@@ -17,7 +17,7 @@ public sealed record TriangulateStep(GaugeNetwork Gauges) : Step<TriangleLayer>
     /// <inheritdoc/>
     public override TriangleLayer Execute(StepContext context)
     {
-        WorkingGrid.RequireForAreas(Gauges.ReferenceSystem, "a triangulation");
+        WorkingGrid.RequireForAreas(Gauges.ReferenceSystem, Gauges.Source, Gauges.Bounds);
         var corners = NetworkCells.Triangulate(Gauges).Corners;
         var triangles = ImmutableArray.CreateBuilder<GaugeTriangle>(corners.Length / 3);
         for (var i = 0; i < corners.Length; i += 3)

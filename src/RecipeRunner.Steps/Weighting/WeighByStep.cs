@@ -20,7 +20,7 @@ public sealed record WeighByStep(BasinLayer Basins, CellLayer Cells) : Step<Weig
     public override WeightTable Execute(StepContext context)
     {
         SameSystem.Require(Basins, Basins.ReferenceSystem, Cells, Cells.ReferenceSystem);
-        WorkingGrid.RequireForAreas(Basins.ReferenceSystem, "areal weights");
+        WorkingGrid.RequireForAreas(Basins.ReferenceSystem, Basins.Source, Basins.Bounds);
         var weights = BasinWeights.Of(NetworkCells.Of(Cells.Gauges), Basins, BasinBatch.Of(Basins.Basins));
         TellOfUnused(context, weights.Select(weight => weight.Gauge));
         return new WeightTable(Basins, Cells, weights);

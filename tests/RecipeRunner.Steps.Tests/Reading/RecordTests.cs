@@ -1,0 +1,153 @@
+using NodaTime;
+using RecipeRunner.Model.Rain;
+using RecipeRunner.Model.Time;
+using RecipeRunner.Steps.Tests.Support;
+
+namespace RecipeRunner.Steps.Tests.Reading;
+
+public sealed class RecordTests : IDisposable
+{
+    private static readonly TimeStep Daily = TimeStep.Days(endingAt: "09:00");
+    private readonly Bench bench = new();
+
+    public void Dispose() => bench.Dispose();
+
+    [Theory]
+    [InlineData("date,B,A\n2024-01-01,1.5,\n2024-01-02,0,2.5\n")]
+    [InlineData("gauge,date,mm\nA,2024-01-02,2.5\nB,2024-01-01,1.5\nB,2024-01-02,0\nA,2024-01-01,\n")]
+    [InlineData("date;B;A\n2024-01-01T09:00;1.5;\n2024-01-02 09:00:00;0;2.5\n")]
+    public void Wide_and_long_files_give_the_same_records(string text)
+    {
+        var records = Read(text);
+
+        records.GaugeIds.ShouldBe(["A", "B"]);
+        records.Labels.ShouldBe([new LocalDate(2024, 1, 1), new LocalDate(2024, 1, 2)]);
+        records.DepthsAt(0).ToArray().ShouldBe([0, 1.5]);
+        records.StatusesAt(0).ToArray().ShouldBe([RecordStatus.Missing, RecordStatus.Observed]);
+        records.DepthsAt(1).ToArray().ShouldBe([2.5, 0]);
+        records.StatusesAt(1).ToArray().ShouldBe([RecordStatus.Observed, RecordStatus.Observed]);
+    }
+
+    [Fact]
+    public void Units_are_exact_where_the_definition_is()
+    {
+        // source: 1 inch = 25.4 mm exactly, international yard and pound agreement of 1959.
+        Depth(RainUnit.Inches, "1").ShouldBe(25.4);
+        Depth(RainUnit.HundredthsOfInch, "100").ShouldBe(25.4);
+        Depth(RainUnit.TenthsOfMillimetre, "3").ShouldBe(0.3);
+        Depth(RainUnit.Centimetres, "1.25").ShouldBe(12.5);
+    }
+
+    [Theory]
+    [InlineData("NA")]
+    [InlineData("-9999")]
+    [InlineData("-9999.0")]
+    public void Markers_of_missing_values_are_honoured_once_declared(string marker)
+    {
+        var text = $"date,A,B\n2024-01-01,{marker},1\n";
+
+        Read(text, missing: [marker]).MissingCount.ShouldBe(1);
+        var problem = Bench.Refused(() => Read(text))[0];
+        problem.Code.ShouldBeOneOf("RR0250", "RR0251");
+        (problem.Where.Line, problem.Where.Column, problem.Where.Item).ShouldBe((2, 2, "gauge A"));
+        problem.Mend.ShouldContain($"missing: [\"{marker}\"]");
+    }
+
+    [Theory]
+    [InlineData("date,A\n2024-01-01,\"1,5\"\n", "RR0250", 2, 2)]
+    [InlineData("date,A\n2024-01-01,-0.5\n", "RR0251", 2, 2)]
+    [InlineData("date,A\n2024-01-01,1\n31.01.2024,1\n", "RR0252", 3, 1)]
+    [InlineData("date,A\n2024-01-01,1\n2024-02-30,1\n", "RR0252", 3, 1)]
+    [InlineData("date,A\n2024-01-01T07:00,1\n", "RR0253", 2, 1)]
+    [InlineData("date,A\nyesterday,1\n", "RR0254", 2, 0)]
+    [InlineData("date,A\n2024-01-01,1\n2024-01-01,1\n", "RR0255", 3, 1)]
+    [InlineData("gauge,date,mm\nA,2024-01-01,1\nA,2024-01-01,2\n", "RR0255", 3, 2)]
+    [InlineData("date,A\n", "RR0256", 0, 0)]
+    [InlineData("date,A,B\n2024-01-01,1\n", "RR0241", 2, 0)]
+    [InlineData("date,A,A\n2024-01-01,1,2\n", "RR0202", 1, 3)]
+    [InlineData("date,A,\n2024-01-01,1,2\n", "RR0244", 1, 3)]
+    public void What_cannot_be_used_is_refused_at_its_place(string text, string code, int line, int column)
+    {
+        var problem = Bench.Refused(() => Read(text))[0];
+
+        (problem.Code, problem.Where.File, problem.Where.Line, problem.Where.Column).ShouldBe(
+            (code, "rain.csv", line, column)
+        );
+        problem.Mend.ShouldNotBeEmpty();
+    }
+
+    [Fact]
+    public void Many_problems_are_told_at_once_and_the_rest_counted()
+    {
+        var rows = Enumerable.Range(1, 28).Select(day => FormattableString.Invariant($"2024-01-{day:00},x{day}"));
+        var problems = Bench.Refused(() => Read("date,A\n" + string.Join('\n', rows) + "\n"));
+
+        problems.Count.ShouldBe(26);
+        problems[^1].What.ShouldStartWith("3 further problems");
+    }
+
+    [Fact]
+    public void Rows_out_of_order_and_dates_without_a_row_are_found()
+    {
+        var records = Read("date,A\n2024-01-05,5\n2024-01-01,1\n2024-01-02,2\n");
+
+        records.Labels.Length.ShouldBe(5);
+        records.MissingCount.ShouldBe(2);
+        records.DepthsAt(4)[0].ShouldBe(5);
+        bench.Study.Findings.Select(finding => finding.Code).ShouldBe(["RR0257", "RR0258"]);
+        bench.Study.Findings[1].What.ShouldContain("2024-01-03");
+    }
+
+    [Fact]
+    public void Depths_beyond_any_measured_silent_gauges_and_long_silences_are_found()
+    {
+        var rows = Enumerable
+            .Range(1, 20)
+            .Select(day =>
+                FormattableString.Invariant(
+                    $"2024-01-{day:00},{(day is > 5 and < 15 ? "" : "1")},,{(day == 3 ? "2500" : "0")}"
+                )
+            );
+        Read("date,A,B,C\n" + string.Join('\n', rows) + "\n");
+
+        bench.Study.Findings.Select(finding => finding.Code).ShouldBe(["RR0260", "RR0261", "RR0262"]);
+        bench.Study.Findings[1].What.ShouldContain("B");
+        bench.Study.Findings[2].What.ShouldContain("A 2024-01-06 to 2024-01-14 (9)");
+    }
+
+    [Fact]
+    public void Months_are_read_by_their_label()
+    {
+        var records = Read("month,A\n2024-01,30\n2024-02,20\n", step: TimeStep.Months);
+
+        records
+            .Step.IntervalOf(records.Labels[1])
+            .ShouldBe(new RainInterval(new LocalDateTime(2024, 2, 1, 0, 0), new LocalDateTime(2024, 3, 1, 0, 0)));
+    }
+
+    [Fact]
+    public void An_observation_day_ends_at_its_hour_on_its_date()
+    {
+        Daily
+            .IntervalOf(new LocalDate(2024, 3, 1))
+            .ShouldBe(new RainInterval(new LocalDateTime(2024, 2, 29, 9, 0), new LocalDateTime(2024, 3, 1, 9, 0)));
+        TimeStep
+            .Days("24:00")
+            .IntervalOf(new LocalDate(2024, 3, 1))
+            .ShouldBe(new RainInterval(new LocalDateTime(2024, 3, 1, 0, 0), new LocalDateTime(2024, 3, 2, 0, 0)));
+        TimeStep.Days("00:00").IntervalOf(new LocalDate(2024, 3, 1)).End.ShouldBe(new LocalDateTime(2024, 3, 1, 0, 0));
+        Bench.Refused(() => TimeStep.Days("9 am"))[0].Code.ShouldBe("RR0501");
+    }
+
+    private double Depth(RainUnit unit, string cell)
+    {
+        bench.Write("rain.csv", $"date,A\n2024-01-01,{cell}\n");
+        return bench.Verbs.ReadRecords("rain.csv", unit, Daily).DepthsAt(0)[0];
+    }
+
+    private RainRecords Read(string text, TimeStep? step = null, string[]? missing = null)
+    {
+        bench.Write("rain.csv", text);
+        return bench.Verbs.ReadRecords("rain.csv", RainUnit.Millimetres, step ?? Daily, missing);
+    }
+}
