@@ -56,6 +56,7 @@ internal static class GeoJsonSource
     private static JsonDocument Parse(StepContext context, string name)
     {
         using var stream = context.OpenInput(name);
+        Utf8Text.Require(stream, name);
         try
         {
             return JsonDocument.Parse(stream);

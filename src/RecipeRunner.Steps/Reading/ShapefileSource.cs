@@ -32,10 +32,19 @@ internal static class ShapefileSource
             Factory = RegionGeometry.Factory,
             GeometryBuilderMode = GeometryBuilderMode.IgnoreInvalidShapes,
         };
-        using var reader = Shapefile.OpenRead(new MemoryStream(shp), new MemoryStream(dbf), options);
+        using var reader = Guard(
+            name,
+            "its columns",
+            () => Shapefile.OpenRead(new MemoryStream(shp), new MemoryStream(dbf), options)
+        );
         var fields = reader.Fields.Select(field => field.Name).ToImmutableArray();
         var features = ImmutableArray.CreateBuilder<FileFeature>();
-        for (var number = 1; reader.Read(out var deleted); number++)
+        var deleted = false;
+        for (
+            var number = 1;
+            Guard(name, FormattableString.Invariant($"feature {number}"), () => reader.Read(out deleted));
+            number++
+        )
         {
             context.Cancellation.ThrowIfCancellationRequested();
             if (!deleted)
@@ -48,6 +57,26 @@ internal static class ShapefileSource
         }
 
         return new FeatureFile(name, fields, features.ToImmutable(), system);
+    }
+
+    /// <summary>Whatever the library throws over a damaged file is told as the damage that it is.</summary>
+    private static T Guard<T>(string name, string item, Func<T> read)
+    {
+        try
+        {
+            return read();
+        }
+        catch (Exception failure) when (failure is not OutOfMemoryException)
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0217",
+                    new Place(name, Item: item),
+                    $"This cannot be read: {failure.Message}",
+                    "Copy all files of the shapefile again from where they came."
+                )
+            );
+        }
     }
 
     private static string TextOf(object? value) =>
