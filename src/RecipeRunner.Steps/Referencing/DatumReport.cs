@@ -21,18 +21,6 @@ internal static class DatumReport
                 )
             );
         }
-
-        if (transform.Target.Facts.Name.EndsWith("(deprecated)", StringComparison.Ordinal))
-        {
-            context.Find(
-                Finding.Notice(
-                    "RR0322",
-                    new Place(file),
-                    $"The registry has deprecated {transform.To.Label} ({transform.To.Name}).",
-                    "Use the system that has taken its place where one has."
-                )
-            );
-        }
     }
 
     private static string AxesOf(KnownSystem system) =>

@@ -24,14 +24,7 @@ internal static class DatumRule
 
         if (NullChain(from, to) is { } chain)
         {
-            var names = string.Join(", then ", chain.Select(step => $"{step.Name} ({step.Code})"));
-            var accuracy = chain.Sum(step => step.AccuracyMetres);
-            return new DatumOperation(
-                string.Join(" + ", chain.Select(step => step.Code)),
-                FormattableString.Invariant($"{names}: null transformation, stated accuracy {accuracy} m"),
-                accuracy,
-                IsTakenAsIs: false
-            );
+            return Describe(chain, from, to);
         }
 
         return choice == DatumChoice.TakeAsIs
@@ -44,16 +37,30 @@ internal static class DatumRule
             : throw Refuse(from, to);
     }
 
-    /// <summary>The most accurate way over one or two null transformations; null where there is none.</summary>
+    private static DatumOperation Describe(OperationEntry[] chain, KnownSystem from, KnownSystem to)
+    {
+        var names = string.Join(", then ", chain.Select(step => $"{step.Name} ({step.Code})"));
+        var accuracy = chain.Sum(step => step.AccuracyMetres);
+        var better = chain.Length > 1 ? Candidates(from, to).FirstOrDefault(one => Leads(one, from, to)) : null;
+        var remark = better is null
+            ? ""
+            : FormattableString.Invariant(
+                $"; also published but not applied: {better.Name} ({better.Code}), {better.AccuracyMetres:0.###} m"
+            );
+        return new DatumOperation(
+            string.Join(" + ", chain.Select(step => step.Code)),
+            FormattableString.Invariant($"{names}: null transformation, stated accuracy {accuracy:0.###} m{remark}"),
+            accuracy,
+            IsTakenAsIs: false
+        );
+    }
+
+    /// <summary>The shortest way over one or two null transformations, the most accurate of those; null where there is none.</summary>
     private static OperationEntry[]? NullChain(KnownSystem from, KnownSystem to)
     {
         var (source, target) = (from.Definition.Datum.Key, to.Definition.Datum.Key);
-        var nulls = RegistryTable
-            .Operations.Where(one =>
-                one.Kind == OperationKind.Null && one.Area.Meets(from.Area) && one.Area.Meets(to.Area)
-            )
-            .ToArray();
-        var direct = nulls.Where(one => Other(one, source) == target).Select(one => new[] { one });
+        var nulls = Suiting(from, to).Where(one => one.Kind == OperationKind.Null).ToArray();
+        var direct = nulls.Where(one => Leads(one, from, to)).Select(one => new[] { one });
         var hops =
             from first in nulls
             let middle = Other(first, source)
@@ -63,10 +70,40 @@ internal static class DatumRule
             select new[] { first, second };
         return direct
             .Concat(hops)
-            .OrderBy(chain => chain.Sum(step => step.AccuracyMetres))
-            .ThenBy(chain => chain.Length)
+            .OrderBy(chain => chain.Length)
+            .ThenBy(chain => chain.Sum(step => step.AccuracyMetres))
             .FirstOrDefault();
     }
+
+    /// <summary>Published operations other than null ones that would bridge the two, the most accurate first.</summary>
+    private static OperationEntry[] Candidates(KnownSystem from, KnownSystem to)
+    {
+        var (source, target) = (from.Definition.Datum.Key, to.Definition.Datum.Key);
+        var suiting = Suiting(from, to).ToArray();
+        var sourceIsLikeWgs84 = IsLikeWgs84(suiting, source);
+        var targetIsLikeWgs84 = IsLikeWgs84(suiting, target);
+        return
+        [
+            .. suiting
+                .Where(one => one.Kind != OperationKind.Null)
+                .Where(one =>
+                    Leads(one, from, to)
+                    || (targetIsLikeWgs84 && Other(one, source) == Wgs84)
+                    || (sourceIsLikeWgs84 && Other(one, target) == Wgs84)
+                )
+                .OrderBy(one => Leads(one, from, to) ? 0 : 1)
+                .ThenBy(one => one.AccuracyMetres),
+        ];
+    }
+
+    private static bool IsLikeWgs84(OperationEntry[] suiting, string datum) =>
+        datum == Wgs84 || suiting.Any(one => one.Kind == OperationKind.Null && Other(one, datum) == Wgs84);
+
+    private static IEnumerable<OperationEntry> Suiting(KnownSystem from, KnownSystem to) =>
+        RegistryTable.Operations.Where(one => one.Area.Meets(from.Area) && one.Area.Meets(to.Area));
+
+    private static bool Leads(OperationEntry operation, KnownSystem from, KnownSystem to) =>
+        Other(operation, from.Definition.Datum.Key) == to.Definition.Datum.Key;
 
     /// <summary>The datum at the other end of an operation; null where it does not touch the one given.</summary>
     private static string? Other(OperationEntry operation, string datum)
@@ -79,35 +116,24 @@ internal static class DatumRule
 
     private static string FrameOf(string datum) => RegistryTable.Datums[datum].Frame;
 
-    /// <summary>Published operations between the two, or between either and WGS 84, that suit the target's area.</summary>
-    private static OperationEntry[] Candidates(KnownSystem from, KnownSystem to)
-    {
-        var (source, target) = (from.Definition.Datum.Key, to.Definition.Datum.Key);
-        var suiting = RegistryTable
-            .Operations.Where(one =>
-                one.Kind != OperationKind.Null && one.Area.Meets(from.Area) && one.Area.Meets(to.Area)
-            )
-            .ToArray();
-        var direct = suiting.Where(one => Other(one, source) == target);
-        var overWgs84 = suiting.Where(one => Other(one, source) == Wgs84 || Other(one, target) == Wgs84);
-        return [.. direct.Concat(overWgs84).Distinct()];
-    }
-
+    /// <summary>How far the published operations move places: a bound on the error of moving none.</summary>
     private static string Error(KnownSystem from, KnownSystem to)
     {
-        var furthest = Candidates(from, to).Max(one => one.FurthestMetres);
-        return furthest is { } metres
-            ? FormattableString.Invariant($"up to about {Math.Max(10, Math.Ceiling(metres / 10) * 10)} m")
-            : "up to several hundred metres";
+        if (Candidates(from, to).Max(one => one.FurthestMetres) is not { } furthest)
+        {
+            return "up to several hundred metres";
+        }
+
+        var round = furthest < 10 ? Math.Ceiling(furthest + 0.5) : Math.Ceiling(furthest / 10) * 10;
+        return FormattableString.Invariant($"up to about {round} m");
     }
 
     private static RefusedException Refuse(KnownSystem from, KnownSystem to)
     {
         var candidates = Candidates(from, to)
-            .OrderBy(one => one.AccuracyMetres)
             .Take(MostCandidates)
             .Select(one =>
-                FormattableString.Invariant($"{one.Code} {one.Name}, {one.AccuracyMetres} m")
+                FormattableString.Invariant($"{one.Code} {one.Name}, {one.AccuracyMetres:0.###} m")
                 + (one.Kind == OperationKind.Grid ? ", needs a grid file" : "")
             )
             .ToArray();

@@ -71,6 +71,15 @@ internal sealed class KnownSystem
 
     private static KnownSystem Check(SystemEntry entry)
     {
+        if (entry.IsDeprecated)
+        {
+            throw Refuse(
+                "RR0303",
+                entry,
+                "has been withdrawn from the registry, and withdrawn definitions can be faulty"
+            );
+        }
+
         if (!CanCompute(entry))
         {
             throw Refuse("RR0303", entry, $"uses the method {entry.Method}, which cannot be computed here");

@@ -12,6 +12,7 @@ internal static class PlaneProof
 {
     private const double WorstScale = 1e-6;
     private const double WorstMetres = 0.001;
+    private const double FarthestScale = 0.05;
     private const int PlacesAcross = 5;
 
     /// <summary>The area in which a system without a stated one is proved and used: about where its method is made for.</summary>
@@ -33,6 +34,7 @@ internal static class PlaneProof
             ),
             PlaneMethod.Mercator => About(form.Longitude, 179, -80, 80),
             PlaneMethod.LambertAzimuthal => About(form.Longitude, 20, form.Latitude - 20, form.Latitude + 20),
+            PlaneMethod.Cassini => About(form.Longitude, 2, form.Latitude - 2, form.Latitude + 2),
             _ => About(form.Longitude, 5, form.Latitude - 5, form.Latitude + 5),
         };
     }
@@ -65,6 +67,11 @@ internal static class PlaneProof
         if (form.Axes != PlaneAxes.EastNorth)
         {
             return "grids with other axes than east and north are only used as the registry defines them";
+        }
+
+        if (Math.Abs(form.Scale - 1) > FarthestScale)
+        {
+            return "its scale is far from 1";
         }
 
         var projection = system.Projection!;

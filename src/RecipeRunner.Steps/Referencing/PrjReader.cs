@@ -9,7 +9,7 @@ public static class PrjReader
     /// <summary>
     /// The registry's system with the same datum, method, parameters and unit, whatever the names; else a system without a
     /// code, where its projection proves itself. Where several codes define one grid, the one that the text claims is taken,
-    /// else a current one before a deprecated one, one of the same name, one that counts from the same meridian, one whose
+    /// else one of the same name, one that counts from the same meridian, one whose
     /// official axes are east, north, the lowest number: in that order. Shifts to WGS 84 in the text (TOWGS84) are not
     /// used: datums follow the registry.
     /// </summary>
@@ -35,7 +35,6 @@ public static class PrjReader
     private static SystemEntry Best(RegistryDefinition[] alike, SystemDefinition wanted) =>
         alike
             .OrderBy(one => one.Entry.Code == wanted.ClaimedCode ? 0 : 1)
-            .ThenBy(one => one.Entry.IsDeprecated ? 1 : 0)
             .ThenBy(one => wanted.Name == one.Entry.Name || wanted.Name == one.Entry.Alias ? 0 : 1)
             .ThenBy(one => one.Definition.MeridianDegrees == wanted.MeridianDegrees ? 0 : 1)
             .ThenBy(one => one.Definition.SaysEastNorth ? 0 : 1)

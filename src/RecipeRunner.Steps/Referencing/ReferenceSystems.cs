@@ -17,7 +17,7 @@ public static class ReferenceSystems
     /// <param name="code">Such as <c>EPSG:32633</c>; case and blanks around it do not matter. Geographic or projected.</param>
     /// <exception cref="RefusedException">
     /// RR0301: the text is no code. RR0302: the registry's current systems have no such code; near ones are named.
-    /// RR0303, RR0311: its method is not computed here. RR0304: it misses its control points.
+    /// RR0303, RR0311: it is deprecated or its method is not computed here. RR0304: it misses its control points.
     /// </exception>
     public static ReferenceSystem Find(string code)
     {
@@ -29,7 +29,7 @@ public static class ReferenceSystems
                 Finding.Error(
                     "RR0302",
                     Place.Of(Prefix + number),
-                    $"There is no current two-dimensional reference system {Prefix}{number} in the registry (EPSG v10.076).",
+                    $"There is no two-dimensional reference system {Prefix}{number} in the registry (EPSG v10.076).",
                     Neighbours(number)
                 )
             );
@@ -58,7 +58,9 @@ public static class ReferenceSystems
     {
         var asked = int.Parse(number, CultureInfo.InvariantCulture);
         var near = RegistryTable
-            .Systems.Keys.Select(key => (Key: key, Digits: Differing(key, number)))
+            .Systems.Where(system => !system.Value.IsDeprecated)
+            .Select(system => system.Key)
+            .Select(key => (Key: key, Digits: Differing(key, number)))
             .OrderBy(other => other.Digits)
             .ThenBy(other => Math.Abs(int.Parse(other.Key, CultureInfo.InvariantCulture) - asked))
             .ThenBy(other => other.Key, StringComparer.Ordinal)

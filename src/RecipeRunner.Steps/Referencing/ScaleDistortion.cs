@@ -81,6 +81,6 @@ internal readonly record struct ScaleDistortion(
     {
         var percent = Math.Max(share * 100, 1e-4);
         var unit = Math.Pow(10, Math.Floor(Math.Log10(percent)) - 1);
-        return FormattableString.Invariant($"{Math.Ceiling((percent / unit) - 1e-6) * unit:G2} %");
+        return FormattableString.Invariant($"{Math.Ceiling((percent / unit) - 1e-6) * unit:0.######} %");
     }
 }

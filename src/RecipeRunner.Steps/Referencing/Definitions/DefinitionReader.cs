@@ -24,7 +24,9 @@ internal sealed class DefinitionReader(Place where, string mend)
     ];
 
     private static readonly string[] GeographicWords = ["DATUM", "PRIMEM", "UNIT", "AXIS", "AUTHORITY"];
-    private static readonly string[] DatumWords = ["SPHEROID", "TOWGS84", "AUTHORITY"];
+
+    /// <summary>TOWGS84 and EXTENSION hint at shifts to WGS 84; datums follow the registry instead.</summary>
+    private static readonly string[] DatumWords = ["SPHEROID", "TOWGS84", "EXTENSION", "AUTHORITY"];
 
     /// <summary>The meaning of a PROJCS, a GEOGCS, or a COMPD_CS that holds either.</summary>
     /// <exception cref="RefusedException">Something is missing or not understood.</exception>

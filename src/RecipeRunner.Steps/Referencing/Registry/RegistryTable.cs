@@ -14,10 +14,10 @@ internal readonly record struct ControlPoint(Location Degrees, Location Plane);
 
 /// <summary>A system as the registry has it.</summary>
 /// <param name="Code">The code, such as <c>EPSG:32633</c>.</param>
-/// <param name="Name">Its name.</param>
-/// <param name="Method">The name of its projection method; empty for a geographic system.</param>
+/// <param name="Name">Its name; for a deprecated one with what has taken its place.</param>
+/// <param name="Method">The name of its projection method; empty for a geographic or a deprecated system.</param>
 /// <param name="Area">Where it is meant to be used.</param>
-/// <param name="Wkt">Its definition in GDAL's dialect of WKT 1; empty where WKT 1 cannot hold it.</param>
+/// <param name="Wkt">Its definition in GDAL's dialect of WKT 1; empty where WKT 1 cannot hold it, and for a deprecated system.</param>
 /// <param name="Controls">Three places, or none.</param>
 /// <param name="Alias">Its name in ESRI's dialect; empty where none is known.</param>
 internal sealed record SystemEntry(
@@ -30,8 +30,8 @@ internal sealed record SystemEntry(
     string Alias
 )
 {
-    /// <summary>True where the registry advises against it.</summary>
-    public bool IsDeprecated => Name.EndsWith("(deprecated)", StringComparison.Ordinal);
+    /// <summary>True where the registry has withdrawn it, often because something in it is wrong.</summary>
+    public bool IsDeprecated => Method.Length == 0 && Wkt.Length == 0;
 
     /// <summary>What <see cref="Wkt"/> says.</summary>
     /// <exception cref="RefusedException">RR0311: it is not understood.</exception>

@@ -8,11 +8,12 @@ Made with Debian 12: python3 3.11.2, python3-pyproj 3.4.1-1+b1, python3-brotli 1
 The facts are those of the EPSG Geodetic Parameter Dataset, owned by the International Association of Oil & Gas
 Producers (IOGP), used under its terms of use (https://epsg.org/terms-of-use.html): the data may be used and passed on,
 they carry no warranty, and what is altered or left out may not be attributed to the dataset. This table is an extract:
-current systems, and projected ones that are deprecated but stand on a current datum; areas of use reduced to rectangles, WKT 1 written and control points computed by PROJ (MIT).
+current systems (of deprecated ones, which may be faulty, only the names), areas of use reduced to rectangles, WKT 1 written and control points computed by PROJ (MIT).
 
 Lines, tab separated, the first field saying which:
-  S code name method area wkt controls alias a system; method is empty for a geographic one; area is west,south,east,north
-                                             in degrees (east < west across 180); wkt is empty where WKT 1 cannot hold it;
+  S code name method area wkt controls alias a system; method is empty for a geographic one, wkt as well for a deprecated
+                                             one; area is west,south,east,north in degrees (east < west across 180); wkt is
+                                             empty where WKT 1 cannot hold it;
                                              controls are lon,lat,x,y;... degrees from Greenwich on the system's own datum,
                                              then what PROJ gives in the system's own unit, east or west axis first as PROJ
                                              orders them for drawing; alias is its name in ESRI's dialect where the
@@ -87,11 +88,9 @@ def controls(crs, area):
 
 
 SYSTEMS = {
-    "projected_crs": """select p.code, p.deprecated from projected_crs p join geodetic_crs g
-        on g.auth_name = p.geodetic_crs_auth_name and g.code = p.geodetic_crs_code
-        where p.auth_name = 'EPSG' and (p.deprecated = 0 or g.deprecated = 0) order by cast(p.code as int)""",
+    "projected_crs": "select code, deprecated from projected_crs where auth_name = 'EPSG' order by cast(code as int)",
     "geodetic_crs": """select code, deprecated from geodetic_crs
-        where auth_name = 'EPSG' and deprecated = 0 and type = 'geographic 2D' order by cast(code as int)""",
+        where auth_name = 'EPSG' and type = 'geographic 2D' order by cast(code as int)""",
 }
 
 
@@ -101,17 +100,28 @@ def systems():
             crs = CRS.from_epsg(code)
             area = crs.area_of_use.bounds
             projected = table == "projected_crs"
-            text = wkt(crs)
+            current = deprecated == "0"
+            text = wkt(crs) if current else ""
             yield (
                 "S",
                 code,
-                crs.name + (" (deprecated)" if deprecated == "1" else ""),
-                crs.coordinate_operation.method_name if projected else "",
+                crs.name if current else f"{crs.name}, deprecated{replacement(table, code)}",
+                crs.coordinate_operation.method_name if projected and current else "",
                 ",".join(map(number, area)),
                 text,
                 controls(crs, area) if projected and text else "",
-                esri_name(table, code),
+                esri_name(table, code) if current else "",
             )
+
+
+def replacement(table, code):
+    found = rows(
+        """select replacement_code from deprecation where table_name = ? and deprecated_auth_name = 'EPSG'
+           and deprecated_code = ? and replacement_auth_name = 'EPSG' order by cast(replacement_code as int)""",
+        table,
+        code,
+    )
+    return " in favour of " + " or ".join("EPSG:" + new for (new,) in found) if found else ""
 
 
 def esri_name(table, code):
