@@ -45,25 +45,32 @@ internal static class ErrorPrinter
     private static void Print(Screen screen, ImmutableArray<RecipeProblem> problems)
     {
         RecipeLine? shown = null;
-        foreach (var problem in problems)
+        for (var i = 0; i < problems.Length; i++)
         {
-            var line = problem.Line is { } at ? FormattableString.Invariant($"{at.File}({at.Line},{at.Column}): ") : "";
-            var where = problem.Problem.Where.ToString();
-            screen.Error(
-                $"{line}error {problem.Problem.Code}: {(where.Length > 0 ? where + ": " : "")}{problem.Problem.What}",
-                Color.Red
-            );
+            var problem = problems[i];
+            PrintWhat(screen, problem);
             if (problem.Line != shown)
             {
                 PrintSource(screen, problem);
             }
 
             shown = problem.Line;
-            if (problem.Problem.Mend.Length > 0)
+            var mend = problem.Problem.Mend;
+            var saidNext =
+                i + 1 < problems.Length && string.Equals(problems[i + 1].Problem.Mend, mend, StringComparison.Ordinal);
+            if (mend.Length > 0 && !saidNext)
             {
-                screen.Error($"   {problem.Problem.Mend}");
+                screen.Error($"   {mend}");
             }
         }
+    }
+
+    private static void PrintWhat(Screen screen, RecipeProblem problem)
+    {
+        var line = problem.Line is { } at ? FormattableString.Invariant($"{at.File}({at.Line},{at.Column}): ") : "";
+        var where = problem.Problem.Where.ToString();
+        var place = where.Length > 0 ? where + ": " : "";
+        screen.Error($"{line}error {problem.Problem.Code}: {place}{problem.Problem.What}", Color.Red);
     }
 
     private static void PrintSource(Screen screen, RecipeProblem problem)

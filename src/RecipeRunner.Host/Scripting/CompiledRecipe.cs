@@ -82,13 +82,20 @@ public sealed class CompiledRecipe
         return new RecipeException([.. problems.Select(problem => Locate(problem, line))], failure);
     }
 
-    private RecipeProblem Locate(Finding problem, RecipeLine? line) =>
-        new(
-            problem,
-            line is { } at ? at with { File = Recipe.ShownFolder + at.File } : null,
-            line is { } known ? SourceOf(known) : "",
-            0
-        );
+    private RecipeProblem Locate(Finding problem, RecipeLine? line)
+    {
+        if (line is not { } at)
+        {
+            return new RecipeProblem(problem, null, "", 0);
+        }
+
+        var source = SourceOf(at);
+        var word = source
+            .Skip(Math.Max(0, at.Column - 1))
+            .TakeWhile(letter => char.IsLetterOrDigit(letter) || letter == '_')
+            .Count();
+        return new RecipeProblem(problem, at with { File = Recipe.ShownFolder + at.File }, source, word);
+    }
 
     private string SourceOf(RecipeLine line)
     {

@@ -4,7 +4,7 @@ namespace RecipeRunner.Model.Steps;
 public sealed class Problems
 {
     /// <summary>How many are kept; what comes later is only counted.</summary>
-    public const int Limit = 25;
+    public const int Limit = 12;
 
     private readonly List<Finding> kept = [];
 

@@ -21,7 +21,7 @@ public sealed record CutToStep(CellLayer Cells, BasinLayer Basins) : Step<PieceL
     /// <inheritdoc/>
     public override PieceLayer Execute(StepContext context)
     {
-        SameSystem.Require(Basins, Basins.ReferenceSystem, Cells, Cells.ReferenceSystem);
+        SameSystem.Require(Basins, Cells.Gauges);
         var bounds = Cells.Gauges.Bounds.With(Basins.Bounds).Grow(1000);
         var outlines = Outlines(new Frame(bounds.West, bounds.South, bounds.East, bounds.North));
         var pieces = ImmutableArray.CreateBuilder<Piece>();

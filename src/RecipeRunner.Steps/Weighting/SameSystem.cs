@@ -6,16 +6,11 @@ namespace RecipeRunner.Steps.Weighting;
 /// <summary>Refuses to combine layers in different reference systems.</summary>
 internal static class SameSystem
 {
-    /// <summary>Refuses where the two differ, naming the recipe lines that made them.</summary>
+    /// <summary>Refuses where basins and gauges differ, naming the recipe lines that made them.</summary>
     /// <exception cref="RefusedException">They differ.</exception>
-    public static void Require(
-        Artifact first,
-        ReferenceSystem firstSystem,
-        Artifact second,
-        ReferenceSystem secondSystem
-    )
+    public static void Require(BasinLayer basins, GaugeNetwork gauges)
     {
-        if (firstSystem.IsSameAs(secondSystem))
+        if (basins.ReferenceSystem.IsSameAs(gauges.ReferenceSystem))
         {
             return;
         }
@@ -24,7 +19,7 @@ internal static class SameSystem
             Finding.Error(
                 "RR0401",
                 new Place(),
-                $"The basins are in {firstSystem.Label} ({first.Lineage?.Line}), the gauges in {secondSystem.Label} ({second.Lineage?.Line}).",
+                $"The basins are in {basins.ReferenceSystem.Label} ({basins.Lineage?.Line}), the gauges in {gauges.ReferenceSystem.Label} ({gauges.Lineage?.Line}).",
                 "Bring both to one working grid with .To(grid)."
             )
         );

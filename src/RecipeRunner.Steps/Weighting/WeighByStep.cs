@@ -19,7 +19,7 @@ public sealed record WeighByStep(BasinLayer Basins, CellLayer Cells) : Step<Weig
     /// <inheritdoc/>
     public override WeightTable Execute(StepContext context)
     {
-        SameSystem.Require(Basins, Basins.ReferenceSystem, Cells, Cells.ReferenceSystem);
+        SameSystem.Require(Basins, Cells.Gauges);
         WorkingGrid.RequireForAreas(Basins.ReferenceSystem, Basins.Source, Basins.Bounds);
         var weights = BasinWeights.Of(NetworkCells.Of(Cells.Gauges), Basins, BasinBatch.Of(Basins.Basins));
         TellOfUnused(context, weights.Select(weight => weight.Gauge));

@@ -45,7 +45,7 @@ public sealed class WeighingTests : IDisposable
         var problem = Bench.Refused(() => basins.WeighBy(cells))[0];
         problem.Code.ShouldBe("RR0401");
         problem.What.ShouldContain("EPSG:32633 (trial.csx line 3)");
-        problem.What.ShouldContain("EPSG:32632 (trial.csx line 2)");
+        problem.What.ShouldContain("EPSG:32632 (trial.csx line 1)");
     }
 
     [Fact]
