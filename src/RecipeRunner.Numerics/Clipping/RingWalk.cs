@@ -19,7 +19,6 @@ namespace RecipeRunner.Numerics.Clipping;
 internal sealed class RingWalk(CellGraph graph)
 {
     public const int NoExit = -1;
-    private const int MostRounds = 4;
 
     private readonly List<Visit> visits = [];
     private int site;
@@ -30,29 +29,42 @@ internal sealed class RingWalk(CellGraph graph)
     private double entryX;
     private double entryY;
     private double twiceSwept;
-    private double magnitude;
+    private double length;
     private double room;
 
     /// <summary>The stays of the last ring, in its order; the first and the last are in the same cell.</summary>
     public List<Visit> Visits => visits;
 
-    /// <summary>Walks a ring; false if rounding keeps the way from closing, as only a ring without an inside can do.</summary>
+    /// <summary>Walks a ring; false if the way does not close, as for a ring that rounding leaves no inside.</summary>
     public bool Follow(ReadOnlySpan<double> ringX, ReadOnlySpan<double> ringY)
     {
         (originX, originY) = (ringX[0], ringY[0]);
+        visits.Clear();
         Locate();
-        // A start on a wall may be given to one side and, coming round, to the other; then the next round starts there.
-        for (int round = 0; round < MostRounds; round++)
+        visits.Clear();
+        int first = site;
+        Round(ringX, ringY);
+        return Close(first);
+    }
+
+    /// <summary>Ends the walk where it began, in the same cell.</summary>
+    private bool Close(int first)
+    {
+        IReadOnlyList<int>? bridge = site == first ? [] : Bridge.Between(graph, site, first, originX, originY);
+        foreach (int slot in bridge ?? [])
         {
-            int first = site;
-            Round(ringX, ringY);
-            if (site == first)
-            {
-                return true;
-            }
+            Leave(slot);
         }
 
-        return false;
+        visits.Add(new Visit(site, NoExit, entryX, entryY, x, y, twiceSwept, length));
+        return bridge is not null;
+    }
+
+    private void Leave(int slot)
+    {
+        visits.Add(new Visit(site, slot, entryX, entryY, x, y, twiceSwept, length));
+        site = graph.Neighbour[slot];
+        Enter();
     }
 
     /// <summary>Finds the cell of the ring's first point: from a site near to it, which is in its own cell, by a straight walk.</summary>
@@ -65,7 +77,6 @@ internal sealed class RingWalk(CellGraph graph)
 
     private void Round(ReadOnlySpan<double> ringX, ReadOnlySpan<double> ringY)
     {
-        visits.Clear();
         (x, y) = (0, 0);
         Enter();
         double anchorX = 0;
@@ -87,23 +98,19 @@ internal sealed class RingWalk(CellGraph graph)
             (anchorX, anchorY) = (toX, toY);
             roomSquared = room * room;
         }
-
-        visits.Add(new Visit(site, NoExit, entryX, entryY, x, y, twiceSwept, magnitude));
     }
 
     private void Enter()
     {
         (entryX, entryY) = (x, y);
         twiceSwept = 0;
-        magnitude = 0;
+        length = 0;
     }
 
     private void Advance(double toX, double toY)
     {
-        double one = (x - entryX) * (toY - entryY);
-        double other = (toX - entryX) * (y - entryY);
-        twiceSwept += one - other;
-        magnitude += Math.Abs(one) + Math.Abs(other);
+        twiceSwept += ((x - entryX) * (toY - entryY)) - ((toX - entryX) * (y - entryY));
+        length += Math.Abs(toX - x) + Math.Abs(toY - y);
         x = toX;
         y = toY;
     }
@@ -123,9 +130,7 @@ internal sealed class RingWalk(CellGraph graph)
             }
 
             Advance(x + (share * (toX - x)), y + (share * (toY - y)));
-            visits.Add(new Visit(site, exit, entryX, entryY, x, y, twiceSwept, magnitude));
-            site = graph.Neighbour[exit];
-            Enter();
+            Leave(exit);
         }
     }
 

@@ -13,7 +13,7 @@ namespace RecipeRunner.Numerics.Clipping;
 /// <param name="ExitX">Where it ends.</param>
 /// <param name="ExitY">Where it ends.</param>
 /// <param name="TwiceSwept">Twice the signed area between the path and its point of entry.</param>
-/// <param name="Magnitude">The sum of the magnitudes that <paramref name="TwiceSwept"/> was added up from.</param>
+/// <param name="Length">Length of the path, each step as |dx| + |dy|.</param>
 [StructLayout(LayoutKind.Auto)]
 internal readonly record struct Visit(
     int Site,
@@ -23,5 +23,5 @@ internal readonly record struct Visit(
     double ExitX,
     double ExitY,
     double TwiceSwept,
-    double Magnitude
+    double Length
 );

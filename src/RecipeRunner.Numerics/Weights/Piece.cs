@@ -17,7 +17,10 @@ internal struct Piece(int site, double aboutX, double aboutY)
 
     public double TwiceArea { get; private set; }
 
-    /// <summary>The sum of the magnitudes that went into <see cref="TwiceArea"/>: what its rounding error is measured by.</summary>
+    /// <summary>
+    /// What the rounding error of <see cref="TwiceArea"/> is measured by: lengths times the size of the coordinates they
+    /// were computed from.
+    /// </summary>
     public double Magnitude { get; private set; }
 
     public void Add(double twiceArea, double magnitude)

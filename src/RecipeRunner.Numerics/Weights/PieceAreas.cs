@@ -12,7 +12,7 @@ namespace RecipeRunner.Numerics.Weights;
 /// Along a wall the sweep is the wall's distance h from that point times the stretch's length, and the length is a sum
 /// over its ends, the crossings and the corners within the ring: h·t at each end, t the place along the wall. So each
 /// crossing and each corner within adds its own term and nothing needs sorting or joining. The point is one of the piece
-/// itself, so that no term is larger than the piece and the accuracy is that of the piece, not of the coordinates.
+/// itself, so that no term is larger than the piece asks for.
 /// </remarks>
 internal sealed class PieceAreas(CellGraph graph)
 {
@@ -82,10 +82,12 @@ internal sealed class PieceAreas(CellGraph graph)
     private void AddPath(Visit visit)
     {
         ref Piece piece = ref PieceOf(visit.Site, visit.EntryX, visit.EntryY);
-        piece.Add(visit.TwiceSwept, visit.Magnitude);
-        double one = (visit.EntryX - piece.AboutX) * (visit.ExitY - piece.AboutY);
-        double other = (visit.ExitX - piece.AboutX) * (visit.EntryY - piece.AboutY);
-        piece.Add(one - other, Math.Abs(one) + Math.Abs(other));
+        double entryX = visit.EntryX - piece.AboutX;
+        double entryY = visit.EntryY - piece.AboutY;
+        double exitX = visit.ExitX - piece.AboutX;
+        double exitY = visit.ExitY - piece.AboutY;
+        double fromOrigin = Size(visit.EntryX, visit.EntryY) + Size(piece.AboutX, piece.AboutY) + visit.Length;
+        piece.Add(visit.TwiceSwept + ((entryX * exitY) - (exitX * entryY)), visit.Length * fromOrigin);
     }
 
     /// <summary>The inside is on the left of the ring: the wall's stretch within begins here, seen from the cell that is left.</summary>
@@ -117,9 +119,18 @@ internal sealed class PieceAreas(CellGraph graph)
     {
         ref Piece piece = ref PieceOf(site, x, y);
         Wall wall = graph.Walls[slot];
-        double toMidX = wall.NormalX * (wall.MidX - originX - piece.AboutX);
-        double toMidY = wall.NormalY * (wall.MidY - originY - piece.AboutY);
+        double midX = wall.MidX - originX;
+        double midY = wall.MidY - originY;
+        double toMidX = midX - piece.AboutX;
+        double toMidY = midY - piece.AboutY;
+        double distance = (toMidX * wall.NormalX) + (toMidY * wall.NormalY);
         double along = ((y - piece.AboutY) * wall.NormalX) - ((x - piece.AboutX) * wall.NormalY);
-        piece.Add(times * (toMidX + toMidY) * along, (Math.Abs(toMidX) + Math.Abs(toMidY)) * Math.Abs(along));
+        double fromOrigin = Size(x, y) + Size(piece.AboutX, piece.AboutY);
+        piece.Add(
+            times * distance * along,
+            (Math.Abs(distance) * fromOrigin) + (Math.Abs(along) * (Size(midX, midY) + fromOrigin))
+        );
     }
+
+    private static double Size(double x, double y) => Math.Abs(x) + Math.Abs(y);
 }

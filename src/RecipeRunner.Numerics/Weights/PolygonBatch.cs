@@ -1,3 +1,5 @@
+using RecipeRunner.Numerics.Predicates;
+
 namespace RecipeRunner.Numerics.Weights;
 
 /// <summary>
@@ -20,7 +22,7 @@ public sealed class PolygonBatch
     /// <param name="polygonStarts">Index of the first ring of each polygon, then the number of rings; ascending from 0.</param>
     /// <exception cref="ArgumentException">
     /// Lengths or starts that do not fit, a polygon without rings, a ring of fewer than three points, or a coordinate that
-    /// is not a number of at most 2²⁷ m.
+    /// is not a number within the lattice's reach.
     /// </exception>
     public PolygonBatch(double[] x, double[] y, int[] ringStarts, int[] polygonStarts)
     {
@@ -80,14 +82,13 @@ public sealed class PolygonBatch
 
     private static void CheckCoordinates(double[] values, string name)
     {
-        const double Reach = 2 * Predicates.Lattice.ReachMetres;
         for (int i = 0; i < values.Length; i++)
         {
-            if (!(Math.Abs(values[i]) <= Reach))
+            if (!(Math.Abs(values[i]) <= Lattice.ReachMetres))
             {
                 throw new ArgumentException(
                     FormattableString.Invariant(
-                        $"Coordinate {i} is {values[i]:R}; it must be a number of at most {Reach:F0} m."
+                        $"Coordinate {i} is {values[i]:R}; it must be a number of at most {Lattice.ReachMetres:F0} m."
                     ),
                     name
                 );

@@ -6,8 +6,8 @@ namespace RecipeRunner.Numerics.Weights;
 /// <summary>Weighs one polygon after another; each thread has its own, as it keeps its working arrays.</summary>
 internal sealed class PolygonWeigher(CellGraph graph, PolygonBatch polygons)
 {
-    /// <summary>Pieces below this part of the magnitudes they were added up from are rounding: 64 units in the last place.</summary>
-    private const double RoundingPart = 1.0 / (1L << 47);
+    /// <summary>Pieces below this part of the magnitudes they were added up from are rounding: 16 roundings.</summary>
+    private const double RoundingPart = 1.0 / (1L << 49);
 
     /// <summary>How far, relative, the pieces may be from the whole.</summary>
     private const double AreaTolerance = 1e-9;

@@ -12,6 +12,19 @@ internal static class Shapes
     public static (double X, double Y)[] Box(double minX, double minY, double maxX, double maxY) =>
         [(minX, minY), (maxX, minY), (maxX, maxY), (minX, maxY)];
 
+    public static (double X, double Y)[] CounterClockwise((double X, double Y)[] ring)
+    {
+        double twice = 0;
+        for (int i = 2; i < ring.Length; i++)
+        {
+            twice +=
+                ((ring[i - 1].X - ring[0].X) * (ring[i].Y - ring[0].Y))
+                - ((ring[i].X - ring[0].X) * (ring[i - 1].Y - ring[0].Y));
+        }
+
+        return twice > 0 ? ring : [.. ring.Reverse()];
+    }
+
     public static PolygonBatch Batch(params (double X, double Y)[][][] polygons)
     {
         (double X, double Y)[][] rings = [.. polygons.SelectMany(rings => rings)];

@@ -1,0 +1,80 @@
+using System.Text.Json;
+using RecipeRunner.Numerics.Tests.Support;
+using RecipeRunner.Numerics.Weights;
+
+namespace RecipeRunner.Numerics.Tests.Weights;
+
+/// <summary>
+/// Shapes whose weights are plain fractions: <i>source:</i> tests/reference/handbook, constructed there, each computed by
+/// two methods.
+/// </summary>
+public sealed class HandbookTests
+{
+    public static TheoryData<string> Examples => [.. Load().Select(example => example.Id)];
+
+    [Theory]
+    [MemberData(nameof(Examples))]
+    public void Weights_are_the_fractions_of_the_handbook(string id)
+    {
+        Example example = Load().Single(candidate => candidate.Id == id);
+        // The example's unit is taken for a kilometre, so that the lattice does not show.
+        Network network = Network.Of([.. example.Gauges.Select(p => (p[0] * example.Scale, p[1] * example.Scale))]);
+        (double X, double Y)[][] rings =
+        [
+            .. example.Parts.SelectMany(part => part.Select((ring, i) => RingOf(ring, example.Scale, isHole: i > 0))),
+        ];
+        AreaWeights weights = AreaWeights.Of(network.Cells(), Shapes.Batch(rings), 1);
+        for (int gauge = 0; gauge < example.Weights.Length; gauge++)
+        {
+            int row = weights.Sites(0).IndexOf(gauge);
+            (row < 0 ? 0 : weights.Weights(0)[row]).ShouldBe(example.Weights[gauge], example.Tolerance, example.Id);
+        }
+
+        double area = weights.PolygonArea(0) / (example.Scale * example.Scale);
+        area.ShouldBe(example.Area, 1e-12 * example.Area);
+        weights.Sites(0).Length.ShouldBe(example.Weights.Count(weight => weight > 0));
+    }
+
+    private static List<Example> Load()
+    {
+        using var document = JsonDocument.Parse(File.ReadAllText(Reference.PathOf("handbook/worked_examples.json")));
+        return
+        [
+            .. document
+                .RootElement.EnumerateArray()
+                .Where(row => row.GetProperty("kind").GetString() == "thiessen_geometry")
+                .Select(Example.Of),
+        ];
+    }
+
+    private static (double X, double Y)[] RingOf(double[][] points, double scale, bool isHole)
+    {
+        IEnumerable<double[]> open = points[0].SequenceEqual(points[^1]) ? points.SkipLast(1) : points;
+        (double X, double Y)[] ring = Shapes.CounterClockwise([.. open.Select(p => (p[0] * scale, p[1] * scale))]);
+        return isHole ? [.. ring.Reverse()] : ring;
+    }
+
+    private sealed record Example(string Id, double[][][][] Parts, double[][] Gauges, double[] Weights, double Area)
+    {
+        /// <summary>Where gauges stand on whole thousandths the lattice holds them; elsewhere it moves them by 1e-8 of the unit.</summary>
+        public double Tolerance => Gauges.All(p => p.All(c => Math.Round(c * 1024) == c * 1024)) ? 1e-12 : 1e-8;
+
+        public double Scale => Gauges.Max(p => p.Max(Math.Abs)) > 1e4 ? 1 : 1024;
+
+        public static Example Of(JsonElement row)
+        {
+            JsonElement inputs = Nested(row, "inputs");
+            JsonElement expected = Nested(row, "expected");
+            return new Example(
+                row.GetProperty("id").GetString().ShouldNotBeNull(),
+                inputs.GetProperty("basin_parts").Deserialize<double[][][][]>().ShouldNotBeNull(),
+                inputs.GetProperty("gauges").Deserialize<double[][]>().ShouldNotBeNull(),
+                expected.GetProperty("weights").Deserialize<double[]>().ShouldNotBeNull(),
+                expected.GetProperty("area").GetDouble()
+            );
+        }
+
+        private static JsonElement Nested(JsonElement row, string name) =>
+            row.TryGetProperty(name, out JsonElement value) ? value : row.GetProperty(name + "_json");
+    }
+}
