@@ -28,6 +28,7 @@ internal sealed class RingProjection(GridTransform transform, double? densify, E
             grid = Carry(finer, where);
         }
 
+        KeepTogether(grid);
         Watch(source, grid, where);
         return WithoutRepeats(grid);
     }
@@ -91,6 +92,20 @@ internal sealed class RingProjection(GridTransform transform, double? densify, E
         transform.ToDegrees(places, degrees, where);
         transform.FromDegrees(places, degrees, results, where);
         return results;
+    }
+
+    /// <summary>Where the target is in degrees, lets a ring go on past 180 instead of jumping to the other side of the Earth.</summary>
+    private void KeepTogether(Location[] ring)
+    {
+        if (transform.Target.Projection is not null || transform.IsIdentity)
+        {
+            return;
+        }
+
+        for (var i = 1; i < ring.Length; i++)
+        {
+            ring[i] = ring[i] with { X = Degrees.Wrap(ring[i].X, ring[i - 1].X) };
+        }
     }
 
     private bool IsGeographic => transform.From.Kind == ReferenceSystemKind.Geographic;

@@ -204,6 +204,31 @@ public sealed class ProjectStepsTests
     }
 
     [Fact]
+    public void A_basin_across_180_stays_in_one_piece_there_and_back()
+    {
+        var grid = ReferenceSystems.Find("EPSG:3460");
+        var degrees = ReferenceSystems.Find("EPSG:4720");
+        var basin = Region.OfShell([new(179.5, -17.5), new(-179.5, -17.5), new(-179.5, -17), new(179.5, -17)]);
+        var projected = Basins("EPSG:4720", basin).To(grid);
+        var back = projected.To(degrees).Basins[0].Shape;
+
+        projected.Basins[0].Shape.Area.ShouldBeInRange(5.5e9, 6.5e9);
+        back.Bounds.Width.ShouldBe(1, 1e-6);
+        back.Area.ShouldBe(0.5, 1e-6);
+        study.Findings.ShouldAllBe(finding => finding.Code == "RR0340");
+    }
+
+    [Fact]
+    public void Nothing_becomes_nothing()
+    {
+        var grid = ReferenceSystems.Find("EPSG:32633");
+
+        Gauges("EPSG:4326").To(grid).Gauges.ShouldBeEmpty();
+        Basins("EPSG:4326").To(grid).Basins.ShouldBeEmpty();
+        study.Findings.ShouldBeEmpty();
+    }
+
+    [Fact]
     public void Columns_come_along()
     {
         var layer = Basins("EPSG:4326", Box(14, 50, 15, 51));

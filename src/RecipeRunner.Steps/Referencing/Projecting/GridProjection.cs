@@ -38,7 +38,7 @@ internal sealed class GridProjection
             work[i] = new XY(Degrees.Wrap(degrees[i].X, form.Longitude), degrees[i].Y);
         }
 
-        toPlane.Transform(work);
+        Run(toPlane, work);
         var failed = -1;
         for (var i = work.Length - 1; i >= 0; i--)
         {
@@ -65,7 +65,7 @@ internal sealed class GridProjection
             work[i] = new XY(turned.X, turned.Y);
         }
 
-        toDegrees.Transform(work);
+        Run(toDegrees, work);
         for (var i = 0; i < work.Length; i++)
         {
             if (Correct(new Location(work[i].X, work[i].Y), metres[i]) is not { } found)
@@ -81,6 +81,15 @@ internal sealed class GridProjection
 
     /// <summary>One place in the plane; not finite where there is none.</summary>
     public Location ToPlane(Location degrees) => IsOnSeam(degrees) ? AcrossSeam(degrees) : ToPlaneBesideSeam(degrees);
+
+    /// <summary>The library throws at nothing.</summary>
+    private static void Run(MathTransform transform, XY[] places)
+    {
+        if (places.Length > 0)
+        {
+            transform.Transform(places);
+        }
+    }
 
     private Location ToPlaneBesideSeam(Location degrees)
     {
