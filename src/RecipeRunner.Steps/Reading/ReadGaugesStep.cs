@@ -114,7 +114,11 @@ public sealed record ReadGaugesStep(
 
     private static Gauge GaugeOf(GaugeRow row, Location place, ReferenceSystem system, Problems problems)
     {
-        NativeUnits.IsPossible(place.X, place.Y, system, row.Place with { Item = $"gauge {row.Id}" }, problems);
+        if (!NativeUnits.IsPossible(place.X, place.Y, system, row.Place with { Item = $"gauge {row.Id}" }, problems))
+        {
+            return new Gauge(row.Id, place);
+        }
+
         double? elevation =
             row.Elevation.Length == 0 ? null : Number(row, row.Elevation, row.ElevationColumn, "elevation", problems);
         return new Gauge(row.Id, ToModel(place, system), elevation);

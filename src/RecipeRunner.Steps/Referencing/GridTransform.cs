@@ -1,5 +1,6 @@
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Numerics.Predicates;
 
 namespace RecipeRunner.Steps.Referencing;
 
@@ -133,12 +134,17 @@ public sealed class GridTransform
 
         if (to.Projection is not null)
         {
-            foreach (ref var result in results)
+            for (var i = 0; i < results.Length; i++)
             {
-                result = LatticeSnap.Snap(result);
+                results[i] = OnLattice(results[i]) ?? throw NoImage(where, degrees[i], to);
             }
         }
     }
+
+    private static Location? OnLattice(Location place) =>
+        Math.Abs(place.X) <= Lattice.ReachMetres && Math.Abs(place.Y) <= Lattice.ReachMetres
+            ? new Location(Lattice.Snap(place.X), Lattice.Snap(place.Y))
+            : null;
 
     private bool IsPlace(Location place) =>
         double.IsFinite(place.X)

@@ -21,7 +21,7 @@ public sealed class NorthCarolinaTests : IDisposable
     {
         bench.CopyShapefile("nc1948/nc", "nc");
         File.Copy(ReferenceFolder.PathOf("nc1948/gauges.csv"), Path.Combine(bench.Folder, "gauges.csv"));
-        var records = ReferenceCsv
+        var records = ReferenceTable
             .Rows("nc1948/gauges.csv")
             .Select(row => $"{row["gauge"]},1948-04,{row["precip_mm"]}\n");
         bench.Write("april.csv", "gauge,month,mm\n" + string.Concat(records));
@@ -63,5 +63,7 @@ public sealed class NorthCarolinaTests : IDisposable
     }
 
     private static IEnumerable<Dictionary<string, string>> Golden(string table, string code) =>
-        ReferenceCsv.Rows($"nc1948/{table}.csv").Where(row => row["crs"] == code && row["datum_variant"] == "noshift");
+        ReferenceTable
+            .Rows($"nc1948/{table}.csv")
+            .Where(row => row["crs"] == code && row["datum_variant"] == "noshift");
 }

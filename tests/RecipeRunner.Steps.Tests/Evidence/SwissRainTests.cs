@@ -4,6 +4,7 @@ using RecipeRunner.Model.Time;
 using RecipeRunner.Steps.Series;
 using RecipeRunner.Steps.Tests.Support;
 using RecipeRunner.Steps.Weighting;
+using RecipeRunner.Testing;
 
 namespace RecipeRunner.Steps.Tests.Evidence;
 
@@ -14,7 +15,7 @@ namespace RecipeRunner.Steps.Tests.Evidence;
 public sealed class SwissRainTests : IDisposable
 {
     private readonly Bench bench = new();
-    private readonly List<Dictionary<string, string>> stations = ReferenceCsv.Rows("sic97/stations.csv");
+    private readonly List<Dictionary<string, string>> stations = ReferenceTable.Rows("sic97/stations.csv");
 
     public void Dispose() => bench.Dispose();
 
@@ -22,13 +23,13 @@ public sealed class SwissRainTests : IDisposable
     public void Weights_and_means_of_boxes_and_hull_agree_with_two_packages()
     {
         var gauges = Gauges();
-        var boxes = ReferenceCsv
+        var boxes = ReferenceTable
             .Rows("sic97/boxes.csv")
             .Select(box =>
                 (box["box"], Bench.Box(box.Number("xmin"), box.Number("ymin"), box.Number("xmax"), box.Number("ymax")))
             );
         var hull = Region.OfShell(
-            ReferenceCsv
+            ReferenceTable
                 .Rows("sic97/hull.csv")
                 .Select(corner => new Location(corner.Number("x_m"), corner.Number("y_m")))
         );
@@ -38,7 +39,7 @@ public sealed class SwissRainTests : IDisposable
 
         foreach (var table in (string[])["thiessen_weights", "thiessen_deldir"])
         {
-            var golden = ReferenceCsv.Rows($"sic97/{table}.csv");
+            var golden = ReferenceTable.Rows($"sic97/{table}.csv");
             golden.Count.ShouldBe(1160);
             ours.Keys.ShouldBe(golden.Select(row => (row["zone"], row["id"])), ignoreOrder: true);
             golden
@@ -50,7 +51,7 @@ public sealed class SwissRainTests : IDisposable
         }
 
         var areal = weights.MeanRain(Rain(), GapPolicy.Withhold);
-        foreach (var mean in ReferenceCsv.Rows("sic97/areal_means.csv"))
+        foreach (var mean in ReferenceTable.Rows("sic97/areal_means.csv"))
         {
             var basin = basins.Basins.Select((b, i) => (b.Id, i)).Single(pair => pair.Id == mean["zone"]).i;
             areal.At(0, basin).DepthMillimetres.ShouldBe(mean.Number("thiessen_mean_mm"), 1e-6);
@@ -60,7 +61,7 @@ public sealed class SwissRainTests : IDisposable
     [Fact]
     public void The_triangulation_has_the_counted_triangles()
     {
-        var expected = ReferenceCsv
+        var expected = ReferenceTable
             .Rows("sic97/delaunay.csv")
             .ToDictionary(row => row["quantity"], row => row.Number("value"));
 

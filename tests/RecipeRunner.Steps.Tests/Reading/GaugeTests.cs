@@ -55,6 +55,18 @@ public sealed class GaugeTests : IDisposable
     }
 
     [Fact]
+    public void Lengths_beyond_any_grid_are_refused()
+    {
+        bench.Write("gauges.csv", "gauge,x,y\nA,400000,5e12\n");
+
+        Bench
+            .Refused(() =>
+                bench.Verbs.ReadGauges("gauges.csv", id: "gauge", x: "x", y: "y", crs: bench.Verbs.Crs("EPSG:32633"))
+            )[0]
+            .Code.ShouldBe("RR0233");
+    }
+
+    [Fact]
     public void Text_that_is_not_utf8_is_refused_with_its_line()
     {
         bench.Write("gauges.csv", System.Text.Encoding.Latin1.GetBytes("gauge,lon,lat\nA,1,2\nMärz,1,2\n"));

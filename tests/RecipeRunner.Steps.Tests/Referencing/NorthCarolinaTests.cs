@@ -19,7 +19,7 @@ public sealed class NorthCarolinaTests
     [InlineData("5070")]
     public void Counties_taken_as_they_are_land_where_the_reference_has_them(string code)
     {
-        var rows = Csv.Read("nc1948/counties_vertices.csv").ToArray();
+        var rows = ReferenceTable.Rows("nc1948/counties_vertices.csv").ToArray();
         var layer = study.Take(Counties(rows)).To(ReferenceSystems.Find("EPSG:" + code), datum: DatumChoice.TakeAsIs);
         var expected = Counties(rows, $"x_{code}_noshift", $"y_{code}_noshift");
 
@@ -41,7 +41,9 @@ public sealed class NorthCarolinaTests
     public void Counties_are_refused_where_the_recipe_accepts_nothing() =>
         Refusals
             .Of(() =>
-                study.Take(Counties(Csv.Read("nc1948/counties_vertices.csv"))).To(ReferenceSystems.Find("EPSG:32119"))
+                study
+                    .Take(Counties(ReferenceTable.Rows("nc1948/counties_vertices.csv")))
+                    .To(ReferenceSystems.Find("EPSG:32119"))
             )
             .Code.ShouldBe("RR0320");
 
@@ -50,12 +52,14 @@ public sealed class NorthCarolinaTests
     [InlineData("5070")]
     public void Gauges_land_where_the_reference_has_them(string code)
     {
-        var gauges = Csv.Read("nc1948/gauges.csv")
+        var gauges = ReferenceTable
+            .Rows("nc1948/gauges.csv")
             .Select(row => new Gauge(row["gauge"], new Location(row.Number("lon"), row.Number("lat"))));
         var network = study
             .Take(new GaugeNetwork(gauges, ReferenceSystems.Find("EPSG:4269"), "gauges.csv"))
             .To(ReferenceSystems.Find("EPSG:" + code));
-        var expected = Csv.Read("nc1948/gauges_projected.csv")
+        var expected = ReferenceTable
+            .Rows("nc1948/gauges_projected.csv")
             .ToDictionary(
                 row => row["gauge"],
                 row => new Location(row.Number("x_" + code), row.Number("y_" + code)),

@@ -232,7 +232,7 @@ public sealed class ProjectStepsTests
     public void Columns_come_along()
     {
         var layer = Basins("EPSG:4326", Box(14, 50, 15, 51));
-        var with = study.Take(layer.WithColumns([Column.OfNumbers("pop", "", "People", [7.0])]));
+        var with = study.Take(layer.WithColumns([Column.OfNumbers("pop", "", 0, "People", [7.0])]));
 
         with.To(ReferenceSystems.Find("EPSG:32633")).Columns.ShouldHaveSingleItem().Name.ShouldBe("pop");
     }

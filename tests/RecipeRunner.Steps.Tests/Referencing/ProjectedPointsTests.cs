@@ -7,10 +7,12 @@ namespace RecipeRunner.Steps.Tests.Referencing;
 /// <summary>Source: tests/reference/crs (PROJ 9.1.1 through pyproj 3.4.1; worked examples of IOGP 373-7-2).</summary>
 public sealed class ProjectedPointsTests
 {
-    private static readonly Dictionary<string, Dictionary<string, string>> Systems = Csv.Read("crs/crs_list.csv")
+    private static readonly Dictionary<string, Dictionary<string, string>> Systems = ReferenceTable
+        .Rows("crs/crs_list.csv")
         .ToDictionary(row => row["epsg"], StringComparer.Ordinal);
 
-    private static readonly ILookup<string, Dictionary<string, string>> Points = Csv.Read("crs/projected_points.csv")
+    private static readonly ILookup<string, Dictionary<string, string>> Points = ReferenceTable
+        .Rows("crs/projected_points.csv")
         .ToLookup(row => row["epsg"], StringComparer.Ordinal);
 
     public static TheoryData<string> Codes => [.. Systems.Keys.Where(code => !IsPolar(code))];
@@ -89,7 +91,7 @@ public sealed class ProjectedPointsTests
     [Fact]
     public void Published_worked_examples_are_met()
     {
-        var examples = Csv.Read("crs/guidance_note_examples.csv").ToArray();
+        var examples = ReferenceTable.Rows("crs/guidance_note_examples.csv").ToArray();
         foreach (var row in examples)
         {
             var system = KnownSystem.Of(ReferenceSystems.Find("EPSG:" + row["epsg"]));

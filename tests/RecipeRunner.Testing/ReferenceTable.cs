@@ -1,20 +1,22 @@
 using System.Globalization;
-using RecipeRunner.Testing;
 
-namespace RecipeRunner.Steps.Tests.Referencing;
+namespace RecipeRunner.Testing;
 
 /// <summary>Reads the comma-separated reference files, quoted fields included.</summary>
-internal static class Csv
+public static class ReferenceTable
 {
     /// <summary>The rows of a file below tests/reference, each by column name.</summary>
-    public static IEnumerable<Dictionary<string, string>> Read(string relative)
+    public static List<Dictionary<string, string>> Rows(string relative)
     {
         var lines = File.ReadLines(ReferenceFolder.PathOf(relative)).Select(Split).ToArray();
-        return lines
-            .Skip(1)
-            .Select(line =>
-                lines[0].Zip(line).ToDictionary(pair => pair.First, pair => pair.Second, StringComparer.Ordinal)
-            );
+        return
+        [
+            .. lines
+                .Skip(1)
+                .Select(line =>
+                    lines[0].Zip(line).ToDictionary(pair => pair.First, pair => pair.Second, StringComparer.Ordinal)
+                ),
+        ];
     }
 
     /// <summary>A number of a row.</summary>
