@@ -52,13 +52,21 @@ public sealed class VerbCatalogue
         var told = stepName is null ? own : comments.OfType(stepName);
         return new VerbEntry(
             method.Name,
-            step?.Namespace is { } space ? space[(space.LastIndexOf('.') + 1)..] : "Study",
+            RoomOf(step ?? method.DeclaringType!),
             SignatureText.Of(method),
             DocComments.Text(told?.Element("summary")),
             [.. method.GetParameters().Select(parameter => ParameterOf(parameter, own))],
             step?.GetCustomAttribute<StepAttribute>()?.Source ?? "",
             DocComments.Text(told?.Element("example"))
         );
+    }
+
+    /// <summary>The last part of the namespace; verbs that stand at the top of a library concern the study itself.</summary>
+    private static string RoomOf(Type type)
+    {
+        var space = type.Namespace!;
+        var last = space[(space.LastIndexOf('.') + 1)..];
+        return string.Equals(space, type.Assembly.GetName().Name, StringComparison.Ordinal) ? "Study" : last;
     }
 
     private static VerbParameter ParameterOf(ParameterInfo parameter, XElement? own)
