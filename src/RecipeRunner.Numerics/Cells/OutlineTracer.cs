@@ -7,16 +7,11 @@ namespace RecipeRunner.Numerics.Cells;
 /// </summary>
 internal sealed class OutlineTracer
 {
-    private const int OffEdge = -1;
-
     private readonly CellGraph graph;
     private readonly int site;
     private readonly Frame frame;
     private readonly bool[] ownsFrameCorner;
-    private readonly List<double> x = [];
-    private readonly List<double> y = [];
-    private int leftBySide = OffEdge;
-    private int firstSide = OffEdge;
+    private readonly List<(double X, double Y)> points = [];
 
     private OutlineTracer(CellGraph graph, int site, Frame frame)
     {
@@ -39,122 +34,117 @@ internal sealed class OutlineTracer
 
     private CellOutline Finish()
     {
-        if (x.Count == 0)
+        if (points.Count > 0)
         {
-            return Owns(((frame.MinX + frame.MaxX) / 2, (frame.MinY + frame.MaxY) / 2))
-                ? new CellOutline(
-                    [frame.MinX, frame.MaxX, frame.MaxX, frame.MinX],
-                    [frame.MinY, frame.MinY, frame.MaxY, frame.MaxY]
-                )
-                : new CellOutline([], []);
+            FollowFrame(points[0]);
+            while (points.Count > 1 && points[^1] == points[0])
+            {
+                points.RemoveAt(points.Count - 1);
+            }
+        }
+        else if (Owns(((frame.MinX + frame.MaxX) / 2, (frame.MinY + frame.MaxY) / 2)))
+        {
+            points.AddRange(Enumerable.Range(0, 4).Select(CornerAfter));
         }
 
-        FollowFrame(firstSide);
-        while (x.Count > 1 && x[^1] == x[0] && y[^1] == y[0])
-        {
-            x.RemoveAt(x.Count - 1);
-            y.RemoveAt(y.Count - 1);
-        }
-
-        return x.Count < 3 ? new CellOutline([], []) : new CellOutline([.. x], [.. y]);
+        return points.Count < 3
+            ? new CellOutline([], [])
+            : new CellOutline([.. points.Select(p => p.X)], [.. points.Select(p => p.Y)]);
     }
 
+    /// <summary>
+    /// Adds the part of a wall within the frame. A corner that rounding has put beside the frame, or to the wrong side of
+    /// the end of the chord, is moved by that rounding.
+    /// </summary>
     private void AddWall(int slot)
     {
         var chord = new Chord(graph.Walls[slot], frame);
-        bool startsInside = CornerWithin(graph.RightCorner(slot), out (double X, double Y) start);
-        bool endsInside = CornerWithin(graph.LeftCorner[slot], out (double X, double Y) end);
-        if (!startsInside && !endsInside && !MeetsFrame(chord, slot))
+        (bool begins, double beginning, (double X, double Y) first) = End(chord, graph.RightCorner(slot), -1);
+        (bool ends, double ending, (double X, double Y) last) = End(chord, graph.LeftCorner[slot], 1);
+        bool passes = !chord.IsEmpty && beginning < chord.ExitAt && ending > chord.EntryAt;
+        if (begins || ends || passes)
         {
-            return;
+            (double X, double Y) entry = beginning > chord.EntryAt ? first : chord.Entry;
+            (double X, double Y) exit = ending < chord.ExitAt ? last : chord.Exit;
+            Follow(
+                begins ? first
+                : passes ? entry
+                : last
+            );
+            Add(
+                ends ? last
+                : passes ? exit
+                : first
+            );
+        }
+    }
+
+    /// <summary>A wall's end: whether it lies within the frame, its place on the chord, and the point, moved into the frame.</summary>
+    private (bool IsWithin, double Place, (double X, double Y) Point) End(Chord chord, int corner, int direction)
+    {
+        if (corner == CellGraph.NoCorner)
+        {
+            return (false, direction * double.PositiveInfinity, default);
         }
 
-        // A chord that rounding has emptied beside a corner within the frame ends at that corner.
-        int startSide = startsInside || chord.IsEmpty ? OffEdge : chord.EntrySide;
-        int endSide = endsInside || chord.IsEmpty ? OffEdge : chord.ExitSide;
-        AddPoint(
-            startsInside ? start
-                : chord.IsEmpty ? end
-                : chord.Entry,
-            startSide
-        );
-        AddPoint(
-            endsInside ? end
-                : chord.IsEmpty ? start
-                : chord.Exit,
-            OffEdge
-        );
-        leftBySide = endSide;
+        (double x, double y) = graph.PositionOf(corner);
+        (double X, double Y) inFrame = (Math.Clamp(x, frame.MinX, frame.MaxX), Math.Clamp(y, frame.MinY, frame.MaxY));
+        return (frame.Holds(x, y), chord.PlaceOf(x, y), inFrame);
     }
 
-    /// <summary>For a wall with no corner within the frame: whether it passes through the frame between its corners.</summary>
-    private bool MeetsFrame(Chord chord, int slot)
+    private void Follow((double X, double Y) point)
     {
-        int right = graph.RightCorner(slot);
-        int left = graph.LeftCorner[slot];
-        return !chord.IsEmpty
-            && (right < 0 || Place(chord, right) < chord.ExitAt)
-            && (left < 0 || Place(chord, left) > chord.EntryAt);
-    }
-
-    private double Place(Chord chord, int corner)
-    {
-        (double px, double py) = graph.PositionOf(corner);
-        return chord.PlaceOf(px, py);
-    }
-
-    private bool CornerWithin(int corner, out (double X, double Y) position)
-    {
-        position = corner < 0 ? default : graph.PositionOf(corner);
-        return corner >= 0 && frame.Holds(position.X, position.Y);
-    }
-
-    /// <summary>Adds a point; when it lies on a side of the frame, first the frame's corners on the way to it.</summary>
-    private void AddPoint((double X, double Y) point, int side)
-    {
-        if (x.Count == 0)
+        if (points.Count > 0)
         {
-            firstSide = side;
-        }
-        else if (side != OffEdge)
-        {
-            FollowFrame(side);
+            FollowFrame(point);
         }
 
-        if (x.Count == 0 || x[^1] != point.X || y[^1] != point.Y)
+        Add(point);
+    }
+
+    private void Add((double X, double Y) point)
+    {
+        if (points.Count == 0 || points[^1] != point)
         {
-            x.Add(point.X);
-            y.Add(point.Y);
+            points.Add(point);
         }
     }
 
     /// <summary>
-    /// From the last point, where the outline reached the frame, counter-clockwise to a point on the frame. A wall cuts
-    /// off one corner of the frame at least, so the way never passes all four: then the two points are one but for
-    /// rounding.
+    /// From the last point counter-clockwise along the frame to another; nothing when they are one. A wall cuts off one
+    /// corner of the frame at least, so the way is never once around: then the two are one but for rounding.
     /// </summary>
-    private void FollowFrame(int side)
+    private void FollowFrame((double X, double Y) point)
     {
-        if (leftBySide == OffEdge || side == OffEdge)
+        int side = SideFrom(points[^1]);
+        int lastSide = SideTo(point);
+        while (points[^1] != point && side != lastSide)
         {
-            return;
-        }
-
-        for (int passed = leftBySide; passed != side; passed = (passed + 1) % 4)
-        {
-            if (ownsFrameCorner[passed])
+            if (ownsFrameCorner[side])
             {
-                ownsFrameCorner[passed] = false;
-                (double cornerX, double cornerY) = CornerAfter(passed);
-                x.Add(cornerX);
-                y.Add(cornerY);
+                ownsFrameCorner[side] = false;
+                Add(CornerAfter(side));
             }
-        }
 
-        leftBySide = OffEdge;
+            side = (side + 1) % 4;
+        }
     }
 
-    /// <summary>The frame's corner at the end of a side, counter-clockwise; sides as in <see cref="Chord"/>.</summary>
+    /// <summary>The side of the frame on which the way on from a point begins: at a corner of the frame the later one.</summary>
+    private int SideFrom((double X, double Y) point) =>
+        point.Y == frame.MinY && point.X < frame.MaxX ? 0
+        : point.X == frame.MaxX && point.Y < frame.MaxY ? 1
+        : point.Y == frame.MaxY && point.X > frame.MinX ? 2
+        : 3;
+
+    /// <summary>The side of the frame on which the way to a point ends: at a corner of the frame the earlier one.</summary>
+    private int SideTo((double X, double Y) point) =>
+        point.Y == frame.MinY && point.X > frame.MinX ? 0
+        : point.X == frame.MaxX && point.Y > frame.MinY ? 1
+        : point.Y == frame.MaxY && point.X < frame.MaxX ? 2
+        : 3;
+
+    /// <summary>The frame's corner at the end of a side: 0 lower, 1 right, 2 upper, 3 left.</summary>
     private (double X, double Y) CornerAfter(int side) =>
         (side is 0 or 1 ? frame.MaxX : frame.MinX, side is 1 or 2 ? frame.MaxY : frame.MinY);
 
