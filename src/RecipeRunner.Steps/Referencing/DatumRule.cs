@@ -17,7 +17,7 @@ internal static class DatumRule
     public static DatumOperation Decide(KnownSystem from, KnownSystem to, DatumChoice choice)
     {
         var (source, target) = (from.Definition.Datum, to.Definition.Datum);
-        if (source.Key == target.Key)
+        if (source.Key == target.Key && from.Definition.Ellipsoid.IsLike(to.Definition.Ellipsoid))
         {
             return new DatumOperation("", $"none needed, both on {source.Name}", 0, IsTakenAsIs: false);
         }

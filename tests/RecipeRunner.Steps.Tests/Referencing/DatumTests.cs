@@ -51,6 +51,15 @@ public sealed class DatumTests
         operation.Text.ShouldContain("GDA94 to GDA2020 (1) (EPSG:8048), 0.01 m");
     }
 
+    /// <summary>Over WGS 84 it would be EPSG:1958 and EPSG:1283 with 2 m.</summary>
+    [Fact]
+    public void Of_two_chains_the_more_accurate_is_taken()
+    {
+        var operation = Between("EPSG:4661", "EPSG:4669").Operation;
+
+        (operation.Code, operation.AccuracyMetres).ShouldBe(("EPSG:8891 + EPSG:8892", 0));
+    }
+
     [Fact]
     public void Nad27_is_refused_by_name_with_what_is_published()
     {

@@ -72,7 +72,7 @@ public sealed class PrjReaderTests
             .Match(Utm33.Replace("WGS_1984_UTM_Zone_33N", "Gauß 7", StringComparison.Ordinal), "a.prj")
             .Code.ShouldBe("EPSG:32633");
 
-    /// <summary>Three codes define one grid: 25832, 3044 (north first) and 31467's like; the claim decides, then the axes.</summary>
+    /// <summary>EPSG:31467 (official axes north, east) and EPSG:5677 (east, north) define one grid.</summary>
     [Theory]
     [InlineData("\"DHDN_3_Degree_Gauss_Zone_3\"", "EPSG:31467")]
     [InlineData("\"A grid\"", "EPSG:5677")]
@@ -251,6 +251,18 @@ public sealed class PrjReaderTests
 
         grid.Datum.ShouldBe("D_Unknown");
         Refusals.Of(() => GridTransform.Between(ReferenceSystems.Find("EPSG:4258"), grid)).Code.ShouldBe("RR0320");
+    }
+
+    /// <summary>A name such as "unknown" says nothing: on two ellipsoids it cannot be one datum.</summary>
+    [Fact]
+    public void Two_unknown_datums_on_different_figures_are_not_one()
+    {
+        var one = OwnGrid.Replace("D_ETRS_1989", "D_Unknown", StringComparison.Ordinal);
+        var other = one.Replace("298.257222101", "293.465", StringComparison.Ordinal);
+
+        Refusals
+            .Of(() => GridTransform.Between(PrjReader.Match(one, "a.prj"), PrjReader.Match(other, "b.prj")))
+            .Code.ShouldBe("RR0320");
     }
 
     private static string Text(string file) => File.ReadAllText(ReferenceFolder.PathOf("crs/wkt/" + file));
