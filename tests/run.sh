@@ -8,6 +8,7 @@ export DOTNET_CLI_TELEMETRY_OPTOUT=1 DOTNET_NOLOGO=1
 # General-purpose readers of the emitted layers, and a browser for the summary page.
 need=(python3-fiona python3-pyproj python3-shapely chromium)
 missing=()
+ldconfig -p | grep -q libicuuc || missing+=(libicu-dev)
 for package in "${need[@]}"; do
   dpkg-query -W -f='${Status}' "$package" 2>/dev/null | grep -q 'ok installed' || missing+=("$package")
 done
@@ -24,11 +25,19 @@ dotnet build -c Release
 results=$(mktemp -d)
 trap 'rm -rf "$results"' EXIT
 status=0
-dotnet test -c Release --no-build --logger trx --results-directory "$results" || status=$?
+run() { # a test project, and a name for its results
+  dotnet test "tests/$1" -c Release --no-build --results-directory "$results" --logger "trx;LogFileName=$2.trx" || status=$?
+}
+for project in Numerics Steps Host EndToEnd; do
+  run "RecipeRunner.$project.Tests" "$project"
+done
 
-# The whole of the tool under a locale with decimal commas and another time zone.
-LC_ALL=de_DE.UTF-8 LANG=de_DE.UTF-8 TZ=Pacific/Kiritimati \
-  dotnet test tests/RecipeRunner.Steps.Tests -c Release --no-build --logger trx --results-directory "$results" || status=$?
+# Once more under a locale with decimal commas and a time zone far from here.
+export LC_ALL=de_DE.UTF-8 LANG=de_DE.UTF-8 TZ=Pacific/Kiritimati
+for project in Numerics Steps Host; do
+  run "RecipeRunner.$project.Tests" "$project-de"
+done
+export LC_ALL=C.UTF-8 LANG=C.UTF-8
 
 python3 tests/count.py "$results"
 exit $status
