@@ -16,6 +16,7 @@ internal sealed class RunStudy(
 {
     private readonly List<JournalEntry> journal = [];
     private readonly List<string> notes = [];
+    private int running;
 
     public string? GivenTitle { get; private set; }
 
@@ -27,6 +28,24 @@ internal sealed class RunStudy(
         where T : Artifact
     {
         cancellation.ThrowIfCancellationRequested();
+        if (Interlocked.Exchange(ref running, 1) == 1)
+        {
+            throw TwoAtOnce();
+        }
+
+        try
+        {
+            return RunAlone(step);
+        }
+        finally
+        {
+            Volatile.Write(ref running, 0);
+        }
+    }
+
+    private T RunAlone<T>(Step<T> step)
+        where T : Artifact
+    {
         var line = RecipeStack.Current();
         var description = new StepDescription(step);
         var taken = description.Inputs.Select(input => Take(input.Name, input.Artifact)).ToImmutableArray();
@@ -48,6 +67,16 @@ internal sealed class RunStudy(
 
     public T Setting<T>(string name, T @default)
         where T : notnull => settings.Use(name, @default);
+
+    private static RefusedException TwoAtOnce() =>
+        new(
+            Finding.Error(
+                "RR0113",
+                new Place(),
+                "Two steps were to run at once; their order in the journal would be chance.",
+                "Run steps one after the other; they use all processors where that pays."
+            )
+        );
 
     private StepInput Take(string name, Artifact artifact) =>
         artifact.Lineage is { } lineage && ReferenceEquals(lineage.Study, this)

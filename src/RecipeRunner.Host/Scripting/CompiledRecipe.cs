@@ -61,7 +61,8 @@ public sealed class CompiledRecipe
     }
 
     private static Exception Unwrap(Exception failure) =>
-        failure is TargetInvocationException or TypeInitializationException && failure.InnerException is { } inner
+        failure is TargetInvocationException or TypeInitializationException or AggregateException
+        && failure.InnerException is { } inner
             ? Unwrap(inner)
             : failure;
 

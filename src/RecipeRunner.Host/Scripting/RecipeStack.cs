@@ -7,7 +7,7 @@ namespace RecipeRunner.Host.Scripting;
 internal static class RecipeStack
 {
     /// <summary>The innermost recipe line of the running thread.</summary>
-    public static RecipeLine Current() => Find(new StackTrace(fNeedFileInfo: true)) ?? default;
+    public static RecipeLine Current() => Find(new StackTrace(fNeedFileInfo: true)) ?? new RecipeLine("", 0, 0);
 
     /// <summary>The innermost recipe line that an exception passed through; null where it passed none.</summary>
     public static RecipeLine? LineOf(Exception failure) =>

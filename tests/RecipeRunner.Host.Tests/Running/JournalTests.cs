@@ -51,6 +51,16 @@ public sealed class JournalTests : IDisposable
     }
 
     [Fact]
+    public void Steps_run_one_after_the_other()
+    {
+        const string Together =
+            "var a = Read(\"a.txt\");\nvar other = System.Threading.Tasks.Task.Run(() => Wait(a));\nSystem.Threading.Thread.Sleep(300);\nRead(\"b.txt\");\n";
+        var problem = bench.Fail(Together);
+
+        (problem.Problem.Code, problem.Line!.Value.Line).ShouldBe(("RR0113", 4));
+    }
+
+    [Fact]
     public void An_artifact_of_another_study_is_refused()
     {
         bench.Run("WordVerbs.Kept = Read(\"a.txt\");");
