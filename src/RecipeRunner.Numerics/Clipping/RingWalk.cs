@@ -79,25 +79,50 @@ internal sealed class RingWalk(CellGraph graph)
     {
         (x, y) = (0, 0);
         Enter();
-        double anchorX = 0;
-        double anchorY = 0;
-        double roomSquared = 0;
-        for (int i = 1; i <= ringX.Length; i++)
+        room = 0;
+        int next = 1;
+        while (next < ringX.Length)
         {
-            double toX = i < ringX.Length ? ringX[i] - originX : 0;
-            double toY = i < ringX.Length ? ringY[i] - originY : 0;
-            double fromAnchorX = toX - anchorX;
-            double fromAnchorY = toY - anchorY;
-            if ((fromAnchorX * fromAnchorX) + (fromAnchorY * fromAnchorY) < roomSquared)
+            GoTo(ringX[next] - originX, ringY[next] - originY);
+            next = StayInRoom(ringX, ringY, next + 1);
+        }
+
+        GoTo(0, 0);
+    }
+
+    /// <summary>
+    /// Passes points for as long as they are nearer to the present one than any wall; returns the first that is not.
+    /// </summary>
+    private int StayInRoom(ReadOnlySpan<double> ringX, ReadOnlySpan<double> ringY, int next)
+    {
+        double roomSquared = room * room;
+        double anchorX = x;
+        double anchorY = y;
+        double lastX = x;
+        double lastY = y;
+        double swept = 0;
+        double path = 0;
+        for (; next < ringX.Length; next++)
+        {
+            double toX = ringX[next] - originX;
+            double toY = ringY[next] - originY;
+            double awayX = toX - anchorX;
+            double awayY = toY - anchorY;
+            if (!((awayX * awayX) + (awayY * awayY) < roomSquared))
             {
-                Advance(toX, toY);
-                continue;
+                break;
             }
 
-            GoTo(toX, toY);
-            (anchorX, anchorY) = (toX, toY);
-            roomSquared = room * room;
+            swept += ((lastX - entryX) * (toY - entryY)) - ((toX - entryX) * (lastY - entryY));
+            path += Math.Abs(toX - lastX) + Math.Abs(toY - lastY);
+            lastX = toX;
+            lastY = toY;
         }
+
+        twiceSwept += swept;
+        length += path;
+        (x, y) = (lastX, lastY);
+        return next;
     }
 
     private void Enter()

@@ -3,7 +3,7 @@ using System.Runtime.InteropServices;
 namespace RecipeRunner.Numerics.Weights;
 
 /// <summary>A sum that carries what each addition rounds off.</summary>
-/// <remarks>A. Neumaier, Zeitschrift für angewandte Mathematik und Mechanik 54 (1974) 39-51.</remarks>
+/// <remarks>D. E. Knuth, The Art of Computer Programming, volume 2, section 4.2.2, theorem B: the error of one addition.</remarks>
 [StructLayout(LayoutKind.Auto)]
 internal struct CompensatedSum
 {
@@ -15,7 +15,8 @@ internal struct CompensatedSum
     public void Add(double term)
     {
         double next = sum + term;
-        lost += Math.Abs(sum) >= Math.Abs(term) ? sum - next + term : term - next + sum;
+        double added = next - sum;
+        lost += (sum - (next - added)) + (term - added);
         sum = next;
     }
 }
