@@ -58,6 +58,7 @@ public abstract class Artifact
         var writer = new CanonicalWriter(hash);
         writer.Write(GetType().FullName!);
         WriteCanonical(writer);
+        writer.Flush();
         return Convert.ToHexStringLower(hash.GetHashAndReset());
     }
 }

@@ -12,23 +12,21 @@ namespace RecipeRunner.Model.Steps;
 public sealed class CanonicalWriter
 {
     private readonly IncrementalHash hash;
+    private readonly byte[] gathered = new byte[1 << 13];
+    private int length;
 
     internal CanonicalWriter(IncrementalHash hash) => this.hash = hash;
 
     /// <summary>A whole number.</summary>
     public void Write(int value)
     {
-        Span<byte> bytes = stackalloc byte[sizeof(int)];
-        BinaryPrimitives.WriteInt32LittleEndian(bytes, value);
-        hash.AppendData(bytes);
+        BinaryPrimitives.WriteInt32LittleEndian(Room(sizeof(int)), value);
     }
 
     /// <summary>A long whole number.</summary>
     public void Write(long value)
     {
-        Span<byte> bytes = stackalloc byte[sizeof(long)];
-        BinaryPrimitives.WriteInt64LittleEndian(bytes, value);
-        hash.AppendData(bytes);
+        BinaryPrimitives.WriteInt64LittleEndian(Room(sizeof(long)), value);
     }
 
     /// <summary>A number by its bits; negative zero as zero.</summary>
@@ -42,17 +40,13 @@ public sealed class CanonicalWriter
     }
 
     /// <summary>Text as UTF-8, its length in bytes first.</summary>
-    public void Write(string value)
-    {
-        var bytes = Encoding.UTF8.GetBytes(value);
-        Write(bytes.Length);
-        hash.AppendData(bytes);
-    }
+    public void Write(string value) => Write(Encoding.UTF8.GetBytes(value).AsSpan());
 
     /// <summary>Raw bytes, their number first.</summary>
     public void Write(ReadOnlySpan<byte> bytes)
     {
         Write(bytes.Length);
+        Flush();
         hash.AppendData(bytes);
     }
 
@@ -105,4 +99,23 @@ public sealed class CanonicalWriter
 
     /// <summary>Another artifact, by its digest.</summary>
     public void Write(Artifact artifact) => Write(artifact.Digest);
+
+    /// <summary>Hands on what was gathered.</summary>
+    internal void Flush()
+    {
+        hash.AppendData(gathered, 0, length);
+        length = 0;
+    }
+
+    /// <summary>Room for some bytes at the end of what is gathered.</summary>
+    private Span<byte> Room(int bytes)
+    {
+        if (length + bytes > gathered.Length)
+        {
+            Flush();
+        }
+
+        length += bytes;
+        return gathered.AsSpan(length - bytes, bytes);
+    }
 }
