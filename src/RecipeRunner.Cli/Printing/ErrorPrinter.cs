@@ -29,6 +29,18 @@ internal static class ErrorPrinter
             Print(screen, [.. refused.Problems.Select(problem => new RecipeProblem(problem, null, "", 0))]);
             return Close(screen, details, refused);
         }
+        catch (Exception failure) when (failure is IOException or UnauthorizedAccessException)
+        {
+            interrupted();
+            return CloseOnDisk(screen, details, failure);
+        }
+    }
+
+    private static int CloseOnDisk(Screen screen, bool details, Exception failure)
+    {
+        screen.Error($"error RR0704: {failure.Message}", Color.Red);
+        screen.Error("   Check that the folders can be read and written, and that the disk has room.");
+        return Close(screen, details, failure);
     }
 
     private static int Close(Screen screen, bool details, Exception failure)

@@ -158,6 +158,24 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
     }
 
     [Fact]
+    public void A_place_that_cannot_be_written_is_told_without_a_stack_trace()
+    {
+        using var tool = new Tool();
+        var said = tool.Run(
+            "run",
+            DemoStudy.Recipe("one-storm"),
+            "--data",
+            DemoStudy.Data,
+            "--into",
+            "/proc/nowhere/x.study"
+        );
+
+        said.ExitCode.ShouldBe(1);
+        said.Errors.ShouldStartWith("error RR0704: ");
+        said.Errors.ShouldNotContain("   at ");
+    }
+
+    [Fact]
     public void A_check_reports_without_running()
     {
         using var tool = new Tool();
