@@ -11,6 +11,7 @@ namespace RecipeRunner.Host.Summarising;
 internal static class MapDrawing
 {
     private const double SheetWidth = 760;
+    private const int MostLabels = 150;
 
     /// <summary>The map of one weighing.</summary>
     /// <param name="weights">The weights, which hold basins, cells and gauges.</param>
@@ -45,7 +46,7 @@ internal static class MapDrawing
             svg.Append(CultureInfo.InvariantCulture, $"<path class=\"cell\" d=\"{view.Path(outline)}\"/>");
         }
 
-        foreach (var basin in weights.Basins.Basins)
+        foreach (var basin in weights.Basins.Basins.Where(_ => weights.Basins.Basins.Length <= MostLabels))
         {
             svg.Append(Label(view.On(Middle(basin.Shape)), Html.Escape(basin.Id), "basin-label"));
         }
@@ -55,14 +56,22 @@ internal static class MapDrawing
         {
             if (view.Shows(gauges[gauge].Place))
             {
-                svg.Append(GaugeMark(view, gauges[gauge], used.Contains(gauge), silent.Contains(gauges[gauge].Id)));
+                svg.Append(
+                    GaugeMark(
+                        view,
+                        gauges[gauge],
+                        used.Contains(gauge),
+                        silent.Contains(gauges[gauge].Id),
+                        gauges.Length <= MostLabels
+                    )
+                );
             }
         }
 
         return svg.Append("</g>").Append(ScaleBar(view)).Append("</svg>").ToString();
     }
 
-    private static string GaugeMark(MapView view, Gauge gauge, bool used, bool silent)
+    private static string GaugeMark(MapView view, Gauge gauge, bool used, bool silent, bool labelled)
     {
         var (x, y) = view.On(gauge.Place);
         var (cx, cy) = (MapView.Text(x), MapView.Text(y));
@@ -70,7 +79,7 @@ internal static class MapDrawing
             silent ? $"<path class=\"silent\" d=\"M{MapView.Text(x - 5)} {MapView.Text(y - 5)}l10 10m0 -10l-10 10\"/>"
             : used ? $"<circle class=\"used\" cx=\"{cx}\" cy=\"{cy}\" r=\"4.5\"/>"
             : $"<rect class=\"unused\" x=\"{MapView.Text(x - 4)}\" y=\"{MapView.Text(y - 4)}\" width=\"8\" height=\"8\"/>";
-        return mark + Label((x + 7, y - 5), Html.Escape(gauge.Id), "gauge-label");
+        return labelled ? mark + Label((x + 7, y - 5), Html.Escape(gauge.Id), "gauge-label") : mark;
     }
 
     private static string Label((double X, double Y) at, string escaped, string style) =>

@@ -136,16 +136,7 @@ internal static class SummaryPage
                 .Raw("</figure>");
         }
 
-        if (basins.Length > MostSeries)
-        {
-            page.Element(
-                "p",
-                string.Create(
-                    CultureInfo.InvariantCulture,
-                    $"{basins.Length - MostSeries} more basins are in the tables."
-                )
-            );
-        }
+        TellOfRest(page, basins.Length - MostSeries, "basins");
     }
 
     private static string[] BasinRow(ArealRainfall areal, int b)
@@ -164,27 +155,42 @@ internal static class SummaryPage
         ];
     }
 
+    /// <summary>Basins or periods across, whichever are fewer.</summary>
     private static void TotalsSection(Html page, ArealTotals totals)
     {
         page.Element("h2", "Totals");
+        var caption = $"Total areal rainfall in mm over {totals.Period.ToSettingText()}; blank where withheld";
         var basins = totals.Basins.Basins;
-        page.Table(
-            $"Total areal rainfall in mm over {totals.Period.ToSettingText()}; blank where withheld",
-            ["period", .. basins.Select(basin => ">" + basin.Id)],
-            totals
-                .Starts.Take(MostRows)
-                .Select(
-                    (start, p) =>
-                        (string[])
-                            [
-                                totals.Period.NameOf(start),
-                                .. basins.Select(
-                                    (_, b) =>
-                                        totals.At(p, b).DepthMillimetres is { } depth ? Html.Number(depth, "N1") : ""
-                                ),
-                            ]
-                )
-        );
+        var periods = totals.Starts.Select(totals.Period.NameOf).ToArray();
+        string Cell(int p, int b) => totals.At(p, b).DepthMillimetres is { } depth ? Html.Number(depth, "N1") : "";
+        if (basins.Length <= periods.Length)
+        {
+            page.Table(
+                caption,
+                ["period", .. basins.Select(basin => ">" + basin.Id)],
+                periods.Take(MostRows).Select((name, p) => (string[])[name, .. basins.Select((_, b) => Cell(p, b))])
+            );
+        }
+        else
+        {
+            page.Table(
+                caption,
+                ["basin", .. periods.Select(name => ">" + name)],
+                basins
+                    .Take(MostRows)
+                    .Select((basin, b) => (string[])[basin.Id, .. periods.Select((_, p) => Cell(p, b))])
+            );
+        }
+
+        TellOfRest(page, Math.Max(basins.Length, periods.Length) - MostRows, "rows");
+    }
+
+    private static void TellOfRest(Html page, int rest, string what)
+    {
+        if (rest > 0)
+        {
+            page.Element("p", string.Create(CultureInfo.InvariantCulture, $"{rest} more {what} are in the tables."));
+        }
     }
 
     private static void WeightsSection(Html page, WeightTable weights)
@@ -205,16 +211,7 @@ internal static class SummaryPage
                         ]
                 )
         );
-        if (weights.Weights.Length > MostRows)
-        {
-            page.Element(
-                "p",
-                string.Create(
-                    CultureInfo.InvariantCulture,
-                    $"{weights.Weights.Length - MostRows} more weights are in the tables."
-                )
-            );
-        }
+        TellOfRest(page, weights.Weights.Length - MostRows, "weights");
     }
 
     private static void StepsSection(Html page, StudyRecord record)

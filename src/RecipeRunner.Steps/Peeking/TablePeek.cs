@@ -9,12 +9,10 @@ namespace RecipeRunner.Steps.Peeking;
 /// <summary>Looks into a text table: as records where its rows begin with times, otherwise column by column.</summary>
 internal static class TablePeek
 {
-    private static readonly string[] UsualMarkers = ["-9999", "-999", "-99.9", "-99", "NA", "NaN", "M", "-"];
-
     public static List<(string Name, string Text)> Of(StepContext context, string name)
     {
         var columns = Columns(context, name);
-        var firstRow = columns.Select(column => column.Cells.FirstOrDefault() ?? "").ToArray();
+        var firstRow = columns.Select(column => column.First).ToArray();
         var isRecord =
             firstRow.Length >= 2
             && (
@@ -28,7 +26,7 @@ internal static class TablePeek
     {
         List<(string Name, string Text)> lines =
         [
-            ("rows", columns[0].Cells.Count.ToString("N0", CultureInfo.InvariantCulture)),
+            ("rows", columns[0].Count.ToString("N0", CultureInfo.InvariantCulture)),
         ];
         lines.AddRange(columns.Select(column => ("column", $"{column.Name}: {column.Describe()}")));
         lines.Add(("system", "a table does not say its reference system; give crs: when reading"));
@@ -37,14 +35,13 @@ internal static class TablePeek
 
     private static List<(string Name, string Text)> OfRecords(StepContext context, string name, PeekColumn[] columns)
     {
-        var time = LabelReader.LooksLikeTime(columns[0].Cells[0]) ? columns[0] : columns[1];
-        var step = time.Cells[0].Length == "2024-01".Length ? TimeStep.Months : TimeStep.Days("24:00");
-        var markers = UsualMarkers
-            .Where(marker =>
-                columns
-                    .Where(column => column != time)
-                    .Any(column => column.Cells.Contains(marker, StringComparer.Ordinal))
-            )
+        var time = LabelReader.LooksLikeTime(columns[0].First) ? columns[0] : columns[1];
+        var step = time.First.Length == "2024-01".Length ? TimeStep.Months : TimeStep.Days("24:00");
+        var markers = columns
+            .Where(column => column != time)
+            .SelectMany(column => column.Markers)
+            .Distinct(StringComparer.Ordinal)
+            .Order(StringComparer.Ordinal)
             .ToArray();
         var records = new ReadRecordsStep(name, RainUnit.Millimetres, step, [.. markers]).Execute(context);
         List<(string Name, string Text)> lines =
@@ -105,43 +102,15 @@ internal static class TablePeek
     {
         using var stream = context.OpenInput(name);
         using var reader = CsvText.Open(stream, name);
-        var columns = CsvText.Names(reader, name).Select(column => new PeekColumn(column, [])).ToArray();
+        var columns = CsvText.Names(reader, name).Select(column => new PeekColumn(column)).ToArray();
         foreach (var row in reader)
         {
             for (var c = 0; c < Math.Min(columns.Length, row.ColCount); c++)
             {
-                columns[c].Cells.Add(row[c].ToString().Trim());
+                columns[c].Add(row[c].Span.Trim());
             }
         }
 
         return columns;
-    }
-
-    private sealed record PeekColumn(string Name, List<string> Cells)
-    {
-        public string Describe()
-        {
-            var filled = Cells.Where(cell => cell.Length > 0).ToArray();
-            var numbers = filled
-                .Select(cell => NumberText.TryRead(cell, out var number) ? number : (double?)null)
-                .ToArray();
-            var blank = Cells.Count - filled.Length;
-            var blanks = blank == 0 ? "" : string.Create(CultureInfo.InvariantCulture, $", {blank:N0} blank");
-            if (filled.Length > 0 && numbers.All(number => number.HasValue))
-            {
-                return string.Create(
-                    CultureInfo.InvariantCulture,
-                    $"numbers from {numbers.Min():0.######} to {numbers.Max():0.######}{blanks}"
-                );
-            }
-
-            var odd = filled.FirstOrDefault(cell => !NumberText.TryRead(cell, out _));
-            var mixed = numbers.Any(number => number.HasValue) ? $", some not numbers, such as '{odd}'" : "";
-            var distinct = filled.Distinct(StringComparer.Ordinal).Count();
-            return string.Create(
-                CultureInfo.InvariantCulture,
-                $"text, {distinct:N0} different, such as {string.Join(", ", filled.Take(3))}{mixed}{blanks}"
-            );
-        }
     }
 }

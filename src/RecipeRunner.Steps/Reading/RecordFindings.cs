@@ -2,6 +2,7 @@ using System.Globalization;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Reading;
 
@@ -59,7 +60,7 @@ internal static class RecordFindings
                 Finding.Caution(
                     "RR0261",
                     new Place(records.Source),
-                    $"No value at all for {Listed(silent.Select(g => records.GaugeIds[g]))}.",
+                    $"No value at all for {Listing.Of([.. silent.Select(g => records.GaugeIds[g])])}.",
                     "Are these gauges closed, or named differently elsewhere?"
                 )
             );
@@ -126,11 +127,4 @@ internal static class RecordFindings
         Enumerable
             .Range(0, records.Labels.Length)
             .SelectMany(t => Enumerable.Range(0, records.GaugeIds.Length).Select(g => (t, g)));
-
-    private static string Listed(IEnumerable<string> ids)
-    {
-        var all = ids.ToArray();
-        return string.Join(", ", all.Take(10))
-            + (all.Length > 10 ? string.Create(CultureInfo.InvariantCulture, $" and {all.Length - 10} more") : "");
-    }
 }

@@ -1,6 +1,7 @@
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Weights;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Series;
 
@@ -65,35 +66,45 @@ public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPoli
 
     private static void TellOfWithheld(StepContext context, ArealRainfall areal)
     {
-        for (var b = 0; b < areal.Basins.Basins.Length; b++)
+        var steps = areal.Labels.Length;
+        var withheld = areal
+            .Basins.Basins.Select(
+                (basin, b) =>
+                    (
+                        basin.Id,
+                        Count: Enumerable.Range(0, steps).Count(t => areal.At(t, b).Status == ArealStatus.Withheld)
+                    )
+            )
+            .ToArray();
+        var always = withheld.Where(basin => basin.Count == steps).Select(basin => basin.Id).ToArray();
+        if (always.Length > 0)
         {
-            var withheld = Enumerable
-                .Range(0, areal.Labels.Length)
-                .Count(t => areal.At(t, b).Status == ArealStatus.Withheld);
-            if (withheld == areal.Labels.Length)
-            {
-                context.Find(
-                    Finding.Caution(
-                        "RR0513",
-                        Place.Of($"basin {areal.Basins.Basins[b].Id}"),
-                        "Every value is withheld.",
-                        "Too few gauges report; see the coverage table."
-                    )
-                );
-            }
-            else if (withheld > 0)
-            {
-                context.Find(
-                    Finding.Notice(
-                        "RR0514",
-                        Place.Of($"basin {areal.Basins.Basins[b].Id}"),
-                        FormattableString.Invariant(
-                            $"{withheld} of {areal.Labels.Length} values are withheld for want of gauges."
-                        ),
-                        ""
-                    )
-                );
-            }
+            context.Find(
+                Finding.Caution(
+                    "RR0513",
+                    Place.Of("areal rainfall"),
+                    $"Every value is withheld for {Listing.Of(always)}.",
+                    "Too few gauges report; see the coverage table."
+                )
+            );
+        }
+
+        var sometimes = withheld
+            .Where(basin => basin.Count > 0 && basin.Count < steps)
+            .Select(basin => FormattableString.Invariant($"{basin.Id} {basin.Count}"))
+            .ToArray();
+        if (sometimes.Length > 0)
+        {
+            context.Find(
+                Finding.Notice(
+                    "RR0514",
+                    Place.Of("areal rainfall"),
+                    FormattableString.Invariant(
+                        $"Of {steps} values a basin, some are withheld for want of gauges: {Listing.Of(sometimes)}."
+                    ),
+                    ""
+                )
+            );
         }
     }
 }

@@ -1,4 +1,3 @@
-using System.Globalization;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
@@ -24,7 +23,7 @@ internal static class RecordColumns
                     "RR0510",
                     new Place(records.Source),
                     $"None of its gauges is in the network ({network.Source}).",
-                    $"Records name {Listed(records.GaugeIds)}; the network has {Listed(network.Gauges.Select(gauge => gauge.Id))}. Read gauges with the id: column that records use."
+                    $"Records name {Listing.Of(records.GaugeIds)}; the network has {Listing.Of([.. network.Gauges.Select(gauge => gauge.Id)])}. Read gauges with the id: column that records use."
                 )
             );
         }
@@ -43,7 +42,7 @@ internal static class RecordColumns
                 Finding.Caution(
                     "RR0511",
                     new Place(records.Source),
-                    $"No record for {Listed(silent)} of {network.Source}; they count as missing throughout.",
+                    $"No record for {Listing.Of(silent)} of {network.Source}; they count as missing throughout.",
                     "Add their records, or leave them out with .Without(…)."
                 )
             );
@@ -61,17 +60,10 @@ internal static class RecordColumns
                 Finding.Caution(
                     "RR0512",
                     new Place(records.Source),
-                    $"Records of {Listed(unknown)} are not used: {network.Source} has no such gauge.",
+                    $"Records of {Listing.Of(unknown)} are not used: {network.Source} has no such gauge.",
                     near
                 )
             );
         }
-    }
-
-    private static string Listed(IEnumerable<string> ids)
-    {
-        var all = ids.ToArray();
-        return string.Join(", ", all.Take(8))
-            + (all.Length > 8 ? string.Create(CultureInfo.InvariantCulture, $" and {all.Length - 8} more") : "");
     }
 }

@@ -1,8 +1,10 @@
-using System.Globalization;
+using NetTopologySuite.Algorithm.Locate;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Weights;
+using RecipeRunner.Model.Wording;
 using RecipeRunner.Steps.Referencing;
+using RecipeRunner.Steps.Shapes;
 
 namespace RecipeRunner.Steps.Weighting;
 
@@ -23,6 +25,7 @@ public sealed record WeighByStep(BasinLayer Basins, CellLayer Cells) : Step<Weig
         WorkingGrid.RequireForAreas(Basins.ReferenceSystem, Basins.Source, Basins.Bounds);
         var weights = BasinWeights.Of(NetworkCells.Of(Cells.Gauges), Basins, BasinBatch.Of(Basins.Basins));
         TellOfUnused(context, weights.Select(weight => weight.Gauge));
+        TellOfUngauged(context, weights.ToLookup(weight => weight.Basin));
         return new WeightTable(Basins, Cells, weights);
     }
 
@@ -32,21 +35,43 @@ public sealed record WeighByStep(BasinLayer Basins, CellLayer Cells) : Step<Weig
         var unused = Cells.Gauges.Gauges.Where((_, gauge) => !seen.Contains(gauge)).Select(gauge => gauge.Id).ToArray();
         if (unused.Length > 0)
         {
-            var listed =
-                string.Join(", ", unused.Take(8))
-                + (
-                    unused.Length > 8
-                        ? string.Create(CultureInfo.InvariantCulture, $" and {unused.Length - 8} more")
-                        : ""
-                );
             context.Find(
                 Finding.Notice(
                     "RR0406",
                     new Place(Cells.Gauges.Source),
-                    $"No basin reaches into the cells of {listed}: they have no weight while all gauges report."
+                    $"No basin reaches into the cells of {Listing.Of(unused)}: they have no weight while all gauges report."
                 )
             );
         }
+    }
+
+    /// <summary>A gauge within a basin has weight there, so only those need be looked at.</summary>
+    private void TellOfUngauged(StepContext context, ILookup<int, Weight> weights)
+    {
+        var ungauged = Basins
+            .Basins.Where((basin, b) => !HoldsGauge(basin, weights[b]))
+            .Select(basin => basin.Id)
+            .ToArray();
+        if (ungauged.Length > 0)
+        {
+            context.Find(
+                Finding.Notice(
+                    "RR0407",
+                    new Place(Basins.Source),
+                    $"No gauge stands within {Listing.Of(ungauged)}; their rain is that of gauges outside.",
+                    "Consider whether those gauges speak for the basin: height, exposure, distance."
+                )
+            );
+        }
+    }
+
+    private bool HoldsGauge(Basin basin, IEnumerable<Weight> weights)
+    {
+        var inside = new IndexedPointInAreaLocator(RegionGeometry.Of(basin.Shape));
+        return weights.Any(weight =>
+            inside.Locate(RegionGeometry.Of(Cells.Gauges.Gauges[weight.Gauge].Place).Coordinate)
+            != NetTopologySuite.Geometries.Location.Exterior
+        );
     }
 }
 

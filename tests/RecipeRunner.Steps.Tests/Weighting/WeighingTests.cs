@@ -81,6 +81,17 @@ public sealed class WeighingTests : IDisposable
     }
 
     [Fact]
+    public void Basins_without_a_gauge_of_their_own_are_a_notice()
+    {
+        var basins = bench.Basins(("gauged", Bench.Box(0, 0, 10, 10)), ("bare", Bench.Box(10, 0, 20, 10)));
+        basins.WeighBy(bench.Network(("A", 5, 5)).ThiessenCells());
+
+        bench
+            .Study.Findings.Single()
+            .ShouldSatisfyAllConditions(f => f.Code.ShouldBe("RR0407"), f => f.What.ShouldContain("within bare;"));
+    }
+
+    [Fact]
     public void Pieces_tile_their_basins()
     {
         var gauges = bench.Network(("A", 10, 10), ("B", 90, 20), ("C", 50, 90), ("D", 400, 400));
