@@ -25,5 +25,7 @@ EmitLayer(gauges, "gauges");
 EmitTable(weights, "weights");
 EmitTable(areal, "areal-rainfall");
 EmitTable(areal.Coverage(), "coverage");
-EmitTable(areal.Total(Every.Month, complete: AtLeast.Percent(90)), "rain-by-month");
+var byMonth = areal.Total(Every.Month, complete: AtLeast.Percent(90));
+EmitTable(byMonth, "rain-by-month");
+EmitTable(byMonth.Completeness(), "rain-by-month-completeness");
 EmitTable(areal.Total(waterYear, complete: AtLeast.Percent(95)), "rain-by-water-year");

@@ -21,8 +21,9 @@ foreach (var gaps in new[] { GapPolicy.Redraw, GapPolicy.Rescale, GapPolicy.With
     var areal = weights.MeanRain(rain, gaps, reporting: AtLeast.Percent(60));
     for (var b = 0; b < basins.Basins.Length; b++)
     {
-        var wet = Enumerable.Range(0, areal.Labels.Length).Count(day => areal.At(day, b).DepthMillimetres >= wetFrom);
-        Note($"{basins.Basins[b].Name}: {wet} days of {wetFrom} mm or more ({gaps}).");
+        var given = Enumerable.Range(0, areal.Labels.Length).Select(day => areal.At(day, b).DepthMillimetres).OfType<double>().ToList();
+        var wet = given.Count(depth => depth >= wetFrom);
+        Note($"{basins.Basins[b].Name}: {wet} of {given.Count} days with a value had {wetFrom} mm or more ({gaps}).");
     }
 
     EmitTable(areal.Total(Every.Month, complete: AtLeast.Percent(90)), $"months-{gaps.ToString().ToLowerInvariant()}");

@@ -34,6 +34,16 @@ internal static class ErrorPrinter
             interrupted();
             return CloseOnDisk(screen, details, failure);
         }
+        catch (Exception failure) when (failure is not OperationCanceledException)
+        {
+            interrupted();
+            screen.Error(
+                $"error RR0000: this is a fault of the tool: {failure.Message} ({failure.GetType().Name})",
+                Color.Red
+            );
+            screen.Error("   Please report it with what --details shows.");
+            return Close(screen, details, failure);
+        }
     }
 
     private static int CloseOnDisk(Screen screen, bool details, Exception failure)

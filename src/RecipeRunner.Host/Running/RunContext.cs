@@ -10,7 +10,7 @@ internal sealed class RunContext(
     OutputFiles outputs,
     IRunObserver observer,
     CancellationToken cancellation
-) : StepContext
+) : StepContext, IDisposable
 {
     private readonly List<Stream> open = [];
 
@@ -61,7 +61,7 @@ internal sealed class RunContext(
     public override void Progress(double share) => observer.Progressed(word, share);
 
     /// <summary>Closes what the step left open.</summary>
-    public void CloseFiles()
+    public void Dispose()
     {
         foreach (var stream in open)
         {

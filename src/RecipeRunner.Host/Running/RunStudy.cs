@@ -49,9 +49,9 @@ internal sealed class RunStudy(
         var line = RecipeStack.Current();
         var description = new StepDescription(step);
         var taken = description.Inputs.Select(input => Take(input.Name, input.Artifact)).ToImmutableArray();
-        var context = new RunContext(description.Attribute.Word, inputs, outputs, observer, cancellation);
+        using var context = new RunContext(description.Attribute.Word, inputs, outputs, observer, cancellation);
         var result = step.Execute(context);
-        context.CloseFiles();
+        context.Dispose();
         result.Adopt(new Lineage(this, journal.Count + 1, line));
         Enter(description, line, taken, context, result);
         return result;

@@ -1,5 +1,7 @@
 using System.Collections.Immutable;
+using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Weights;
 
 namespace RecipeRunner.Host.Running;
 
@@ -49,6 +51,20 @@ public sealed record StudyRecord
     /// <summary>Findings of all steps, worst first, within a severity in the order of the steps.</summary>
     public ImmutableArray<Finding> Findings =>
         [.. Journal.SelectMany(entry => entry.Findings).OrderByDescending(finding => finding.Severity)];
+
+    /// <summary>The weights that the first areal rainfall rests on, or else the first that were made; null where there are none.</summary>
+    public WeightTable? MainWeights
+    {
+        get
+        {
+            var used = Journal
+                .FirstOrDefault(entry => entry.Output is ArealRainfall)
+                ?.Inputs.Select(input => Journal[input.Entry - 1].Output)
+                .OfType<WeightTable>()
+                .FirstOrDefault();
+            return used ?? Results<WeightTable>().FirstOrDefault();
+        }
+    }
 
     /// <summary>The results of the steps that are of one kind, in order.</summary>
     /// <typeparam name="T">The kind of artifact.</typeparam>

@@ -15,7 +15,7 @@ public sealed class CompiledRecipe
 
     internal CompiledRecipe(
         RecipeText recipe,
-        ImmutableArray<(string Name, string Text)> loaded,
+        ImmutableArray<LoadedText> loaded,
         byte[] image,
         byte[] lines,
         string entryType,
@@ -33,8 +33,8 @@ public sealed class CompiledRecipe
     /// <summary>The recipe.</summary>
     public RecipeText Recipe { get; }
 
-    /// <summary>The files that it loads: name relative to its folder, and text.</summary>
-    public ImmutableArray<(string Name, string Text)> Loaded { get; }
+    /// <summary>The files that it loads.</summary>
+    public ImmutableArray<LoadedText> Loaded { get; }
 
     /// <summary>Runs the recipe to its end.</summary>
     /// <param name="verbs">The top-level verbs of the study.</param>
@@ -102,7 +102,7 @@ public sealed class CompiledRecipe
     {
         var text = string.Equals(line.File, Recipe.FileName, StringComparison.Ordinal)
             ? Recipe.Text
-            : Loaded.FirstOrDefault(file => string.Equals(file.Name, line.File, StringComparison.Ordinal)).Text ?? "";
+            : Loaded.FirstOrDefault(file => string.Equals(file.Name, line.File, StringComparison.Ordinal))?.Text ?? "";
         return text.Split('\n').ElementAtOrDefault(line.Line - 1)?.TrimEnd('\r') ?? "";
     }
 }

@@ -3,16 +3,22 @@ using Microsoft.CodeAnalysis;
 
 namespace RecipeRunner.Host.Scripting;
 
+/// <summary>A file that a recipe loads.</summary>
+/// <param name="Name">Relative to the recipe's folder, with forward slashes.</param>
+/// <param name="Bytes">The file, byte for byte.</param>
+/// <param name="Text">Its text.</param>
+public sealed record LoadedText(string Name, ImmutableArray<byte> Bytes, string Text);
+
 /// <summary>
 /// Resolves <c>#load</c> within the recipe's folder and remembers what was loaded. Paths are relative to the file that
 /// loads; rooted paths, paths that climb out of the folder, and links are not found.
 /// </summary>
 internal sealed class LoadedTexts(string folder) : SourceReferenceResolver
 {
-    private readonly SortedDictionary<string, string> loaded = new(StringComparer.Ordinal);
+    private readonly SortedDictionary<string, LoadedText> loaded = new(StringComparer.Ordinal);
 
-    /// <summary>The loaded files: name relative to the recipe's folder with forward slashes, and text.</summary>
-    public ImmutableArray<(string Name, string Text)> All => [.. loaded.Select(pair => (pair.Key, pair.Value))];
+    /// <summary>The loaded files, in ordinal order of their names.</summary>
+    public ImmutableArray<LoadedText> All => [.. loaded.Values];
 
     public override string? NormalizePath(string path, string? baseFilePath) => ResolveReference(path, baseFilePath);
 
@@ -33,7 +39,7 @@ internal sealed class LoadedTexts(string folder) : SourceReferenceResolver
     public override Stream OpenRead(string resolvedPath)
     {
         var bytes = File.ReadAllBytes(Path.Combine(folder, resolvedPath));
-        loaded[resolvedPath] = System.Text.Encoding.UTF8.GetString(bytes);
+        loaded[resolvedPath] = new LoadedText(resolvedPath, [.. bytes], RecipeText.Decode(bytes, resolvedPath));
         return new MemoryStream(bytes, writable: false);
     }
 

@@ -1,3 +1,6 @@
+using System.Collections.Immutable;
+using System.Text;
+using System.Text.Unicode;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Host.Scripting;
@@ -5,8 +8,9 @@ namespace RecipeRunner.Host.Scripting;
 /// <summary>A recipe as it was read: its text, where it lies, and how people see its name.</summary>
 /// <param name="FilePath">The full path of the recipe file.</param>
 /// <param name="ShownFolder">The folder as the person wrote it, with a trailing slash; empty for the current folder.</param>
-/// <param name="Text">The text.</param>
-public sealed record RecipeText(string FilePath, string ShownFolder, string Text)
+/// <param name="Bytes">The file, byte for byte.</param>
+/// <param name="Text">Its text.</param>
+public sealed record RecipeText(string FilePath, string ShownFolder, ImmutableArray<byte> Bytes, string Text)
 {
     /// <summary>The largest recipe that is read, in bytes.</summary>
     public const int LargestBytes = 1 << 20;
@@ -53,7 +57,28 @@ public sealed record RecipeText(string FilePath, string ShownFolder, string Text
         }
 
         var shown = Path.GetDirectoryName(path) is { Length: > 0 } folder ? folder + "/" : "";
-        return new RecipeText(file.FullName, shown, File.ReadAllText(path));
+        var bytes = File.ReadAllBytes(path);
+        return new RecipeText(file.FullName, shown, [.. bytes], Decode(bytes, path));
+    }
+
+    /// <summary>The text of a recipe's bytes: UTF-8, with or without a byte-order mark.</summary>
+    /// <exception cref="RefusedException">They are not UTF-8.</exception>
+    internal static string Decode(ReadOnlySpan<byte> bytes, string shown)
+    {
+        var text = bytes.StartsWith(Encoding.UTF8.Preamble) ? bytes[Encoding.UTF8.Preamble.Length..] : bytes;
+        if (Utf8.IsValid(text))
+        {
+            return Encoding.UTF8.GetString(text);
+        }
+
+        throw new RefusedException(
+            Finding.Error(
+                "RR0104",
+                new Place(shown),
+                "The recipe is not UTF-8 text.",
+                "Save it as UTF-8 in your editor."
+            )
+        );
     }
 
     private static string NearRecipes(string path)

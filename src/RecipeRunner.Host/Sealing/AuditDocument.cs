@@ -25,7 +25,9 @@ internal static class AuditDocument
             ["recipe_files"] = Array(record.RecipeFiles.Select(FileEntry)),
             ["inputs"] = Array(record.Inputs.Select(FileEntry)),
             ["journal"] = Array(record.Journal.Select(Entry)),
-            ["findings"] = Array(record.Findings.Select(FindingEntry)),
+            ["findings"] = Array(
+                record.Journal.SelectMany(entry => entry.Findings.Select(finding => FindingOf(entry, finding)))
+            ),
             ["outputs"] = Array(record.Outputs.Select(FileEntry)),
         };
 
@@ -72,18 +74,27 @@ internal static class AuditDocument
             ["sha256"] = input.Digest,
         };
 
+    private static JsonObject FindingOf(JournalEntry entry, Finding finding)
+    {
+        var node = FindingEntry(finding);
+        node.Insert(0, "step", entry.Number);
+        return node;
+    }
+
     private static JsonObject FindingEntry(Finding finding) =>
         new()
         {
             ["severity"] = SeverityWord.Of(finding.Severity),
             ["code"] = finding.Code,
             ["file"] = finding.Where.File,
-            ["line"] = finding.Where.Line,
-            ["column"] = finding.Where.Column,
+            ["line"] = Known(finding.Where.Line),
+            ["column"] = Known(finding.Where.Column),
             ["item"] = finding.Where.Item,
             ["what"] = finding.What,
             ["mend"] = finding.Mend,
         };
+
+    private static JsonNode? Known(int place) => place > 0 ? JsonValue.Create(place) : null;
 
     private static JsonArray Pairs(IEnumerable<(string Name, string Value)> pairs) =>
         Array(pairs.Select(pair => new JsonObject { ["name"] = pair.Name, ["value"] = pair.Value }));

@@ -1,5 +1,4 @@
 using System.Collections.Immutable;
-using System.Text;
 using RecipeRunner.Host.Running;
 using RecipeRunner.Host.Scripting;
 
@@ -10,18 +9,20 @@ internal static class RecipeFiles
 {
     public static ImmutableArray<FileRecord> Write(CompiledRecipe compiled, string payload)
     {
-        var texts = compiled.Loaded.Add((compiled.Recipe.FileName, compiled.Recipe.Text));
-        foreach (var (name, text) in texts)
+        var files = compiled.Loaded.Add(
+            new LoadedText(compiled.Recipe.FileName, compiled.Recipe.Bytes, compiled.Recipe.Text)
+        );
+        foreach (var file in files)
         {
-            var path = Path.Combine(payload, "recipe", name);
+            var path = Path.Combine(payload, "recipe", file.Name);
             Directory.CreateDirectory(Path.GetDirectoryName(path)!);
-            File.WriteAllText(path, text, new UTF8Encoding(encoderShouldEmitUTF8Identifier: false));
+            File.WriteAllBytes(path, file.Bytes.AsSpan());
         }
 
         return
         [
-            .. texts
-                .Select(text => "recipe/" + text.Name)
+            .. files
+                .Select(file => "recipe/" + file.Name)
                 .Order(StringComparer.Ordinal)
                 .Select(path => FileDigest.Of(payload, path)),
         ];

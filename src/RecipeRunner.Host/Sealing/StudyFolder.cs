@@ -8,6 +8,10 @@ namespace RecipeRunner.Host.Sealing;
 /// </summary>
 internal sealed class StudyFolder : IDisposable
 {
+    private const string LockName = "lock";
+    private const string BuiltName = "study";
+    private const string OldName = "old";
+
     private readonly string making;
     private readonly FileStream hold;
 
@@ -25,7 +29,7 @@ internal sealed class StudyFolder : IDisposable
     /// <summary>The payload folder of the study in the making.</summary>
     public string Payload => Path.Combine(Built, "data");
 
-    private string Built => Path.Combine(making, "study");
+    private string Built => Path.Combine(making, BuiltName);
 
     private string Old => OldOf(making);
 
@@ -36,7 +40,9 @@ internal sealed class StudyFolder : IDisposable
     public static StudyFolder Begin(string finalPath, bool replace)
     {
         finalPath = Path.TrimEndingDirectorySeparator(finalPath);
+        RequireParent(finalPath);
         var workshop = finalPath + ".making";
+        RequireOwn(workshop);
         Directory.CreateDirectory(workshop);
         var held = Hold(finalPath, workshop);
         try
@@ -78,14 +84,64 @@ internal sealed class StudyFolder : IDisposable
         Release(hold, making);
     }
 
-    private static string OldOf(string making) => Path.Combine(making, "old");
+    private static string OldOf(string making) => Path.Combine(making, OldName);
+
+    private static void RequireParent(string finalPath)
+    {
+        var parent = Path.GetDirectoryName(Path.GetFullPath(finalPath))!;
+        if (!Directory.Exists(parent))
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0705",
+                    new Place(finalPath),
+                    $"There is no folder {parent} to put it in.",
+                    "Make that folder first, or name another with --into."
+                )
+            );
+        }
+    }
+
+    /// <summary>What lies in the workshop must be a run's own; anything else is somebody's and is left alone.</summary>
+    private static void RequireOwn(string workshop)
+    {
+        var strange = Directory.Exists(workshop)
+            ? Directory
+                .EnumerateFileSystemEntries(workshop)
+                .Select(Path.GetFileName)
+                .FirstOrDefault(name => name is not (LockName or BuiltName or OldName))
+            : null;
+        if (strange is not null || File.Exists(workshop))
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0706",
+                    new Place(workshop),
+                    "A study is built there, but something that is not a study in the making lies there. It is left as it is.",
+                    "Move it, or name another folder with --into."
+                )
+            );
+        }
+    }
+
+    private static void DeleteOwnFolders(string making)
+    {
+        foreach (
+            var folder in new[] { BuiltName, OldName }
+                .Select(name => Path.Combine(making, name))
+                .Where(Directory.Exists)
+        )
+        {
+            Directory.Delete(folder, recursive: true);
+        }
+    }
 
     private static FileStream Hold(string finalPath, string making)
     {
         try
         {
             return new FileStream(
-                Path.Combine(making, "lock"),
+                Path.Combine(making, LockName),
                 FileMode.OpenOrCreate,
                 FileAccess.ReadWrite,
                 FileShare.None
@@ -111,10 +167,7 @@ internal sealed class StudyFolder : IDisposable
             Directory.Move(OldOf(making), finalPath);
         }
 
-        foreach (var folder in Directory.GetDirectories(making))
-        {
-            Directory.Delete(folder, recursive: true);
-        }
+        DeleteOwnFolders(making);
     }
 
     private static void ThrowWhereTaken(string finalPath, bool replace)
@@ -149,7 +202,9 @@ internal sealed class StudyFolder : IDisposable
 
     private static void Release(FileStream hold, string making)
     {
+        DeleteOwnFolders(making);
         hold.Dispose();
-        Directory.Delete(making, recursive: true);
+        File.Delete(Path.Combine(making, LockName));
+        Directory.Delete(making);
     }
 }

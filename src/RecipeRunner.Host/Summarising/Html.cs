@@ -31,7 +31,8 @@ internal sealed class Html
     /// <param name="rows">Cells, a row each.</param>
     public Html Table(string caption, IReadOnlyList<string> heads, IEnumerable<IReadOnlyList<string>> rows)
     {
-        Raw("<table>").Element("caption", caption);
+        Raw("<div class=\"wide\" tabindex=\"0\" role=\"region\" aria-label=\"Table\"><table>")
+            .Element("caption", caption);
         Raw(
             "<thead><tr>"
                 + string.Concat(
@@ -45,7 +46,7 @@ internal sealed class Html
             Raw($"<tr><th scope=\"row\">{Escape(row[0])}</th>{string.Concat(cells)}</tr>");
         }
 
-        return Raw("</tbody></table>");
+        return Raw("</tbody></table></div>");
     }
 
     /// <summary>Text safe in markup; characters that a page cannot hold, or that turn text around, become a blot.</summary>
@@ -55,7 +56,8 @@ internal sealed class Html
         foreach (var letter in content)
         {
             var steers =
-                char.IsControl(letter) || letter is (>= '\u202A' and <= '\u202E') or (>= '\u2066' and <= '\u2069');
+                char.IsControl(letter)
+                || letter is (>= '\u202A' and <= '\u202E') or (>= '\u2066' and <= '\u2069') or '\u200E' or '\u200F';
             safe.Append(steers ? '\uFFFD' : letter);
         }
 

@@ -72,7 +72,7 @@ internal static class SeriesDrawing
                 .Select(t => areal.At(t, basin))
                 .ToArray();
             return new Bar(
-                values.Sum(value => value.DepthMillimetres),
+                values.Sum(value => value.DepthMillimetres ?? 0),
                 values.Average(value => value.WeightReporting),
                 values.Count(value => value.Status == ArealStatus.Withheld)
             );

@@ -12,7 +12,7 @@ public static class StudyFacts
     /// <param name="record">The study.</param>
     public static IEnumerable<(string Name, string Text)> Of(StudyRecord record)
     {
-        if (record.Results<WeightTable>().LastOrDefault() is { } weights)
+        if (record.MainWeights is { } weights)
         {
             var area = weights.Basins.Basins.Sum(basin => basin.Shape.Area) / 1e6;
             yield return (
@@ -30,7 +30,7 @@ public static class StudyFacts
                 "time",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{series.Sum(areal => areal.Labels.Length):N0} steps ({series[0].Step.ToSettingText()})"
+                    $"{series.Max(areal => areal.Labels.Length):N0} {series[0].Step.ToSettingText()}{(series.Length > 1 ? $", {series.Length} series" : "")}"
                 )
             );
             yield return (

@@ -24,26 +24,14 @@ internal static class SummaryPage
         page.Element("title", record.Title).Raw($"<style>{Style()}</style></head><body><main>");
         Opening(page, record);
         FindingsSection(page, record);
-        if (record.Results<WeightTable>().LastOrDefault() is { } weights)
+        if (record.MainWeights is { } weights)
         {
             MapSection(page, weights, record);
         }
 
-        foreach (var areal in record.Results<ArealRainfall>())
+        foreach (var entry in record.Journal.DistinctBy(entry => entry.Output.Digest, StringComparer.Ordinal))
         {
-            RainSection(page, areal);
-        }
-
-        foreach (
-            var totals in record.Results<ArealTotals>().DistinctBy(totals => totals.Digest, StringComparer.Ordinal)
-        )
-        {
-            TotalsSection(page, totals);
-        }
-
-        foreach (var table in record.Results<WeightTable>().DistinctBy(table => table.Digest, StringComparer.Ordinal))
-        {
-            WeightsSection(page, table);
+            ResultSection(page, entry);
         }
 
         StepsSection(page, record);
@@ -51,6 +39,33 @@ internal static class SummaryPage
         FilesSection(page, record);
         RerunSection(page, record);
         return page.Raw("</main></body></html>").ToString();
+    }
+
+    /// <summary>What a step gave, under a heading that says which step it was and how it was set.</summary>
+    private static void ResultSection(Html page, JournalEntry entry)
+    {
+        var settings = string.Join(
+            ", ",
+            entry
+                .Settings.Where(setting => setting.Text.Length > 0)
+                .Select(setting => $"{setting.Name}: {setting.Text}")
+        );
+        var from = string.Create(
+            CultureInfo.InvariantCulture,
+            $"Step {entry.Number}{(settings.Length > 0 ? "; " + settings : "")}."
+        );
+        switch (entry.Output)
+        {
+            case ArealRainfall areal:
+                RainSection(page, areal, from);
+                break;
+            case ArealTotals totals:
+                TotalsSection(page, totals, from);
+                break;
+            case WeightTable weights:
+                WeightsSection(page, weights, from);
+                break;
+        }
     }
 
     private static void Opening(Html page, StudyRecord record)
@@ -106,7 +121,7 @@ internal static class SummaryPage
         );
     }
 
-    private static void RainSection(Html page, ArealRainfall areal)
+    private static void RainSection(Html page, ArealRainfall areal, string from)
     {
         page.Element("h2", "Basins");
         var basins = areal.Basins.Basins;
@@ -121,8 +136,9 @@ internal static class SummaryPage
                 ">steps withheld",
                 ">mean share of weight reporting",
             ],
-            basins.Select((_, b) => BasinRow(areal, b))
+            basins.Take(MostRows).Select((_, b) => BasinRow(areal, b))
         );
+        TellOfRest(page, basins.Length - MostRows, "basins");
         page.Element("h2", "Rain through time");
         page.Element(
             "p class=\"key\"",
@@ -148,18 +164,18 @@ internal static class SummaryPage
             areal.Basins.Basins[b].Id,
             areal.Basins.Basins[b].Name,
             Html.Number(areal.Basins.Basins[b].Shape.Area / 1e6, "N2"),
-            Html.Number(values.Sum(value => value.DepthMillimetres), "N1"),
-            Html.Number(values.Max(value => value.DepthMillimetres), "N1"),
+            Html.Number(values.Sum(value => value.DepthMillimetres ?? 0), "N1"),
+            Html.Number(values.Max(value => value.DepthMillimetres ?? 0), "N1"),
             Html.Number(withheld, "N0"),
             Html.Number(100 * values.Average(value => value.WeightReporting), "0.0") + " %",
         ];
     }
 
     /// <summary>Basins or periods across, whichever are fewer.</summary>
-    private static void TotalsSection(Html page, ArealTotals totals)
+    private static void TotalsSection(Html page, ArealTotals totals, string from)
     {
         page.Element("h2", "Totals");
-        var caption = $"Total areal rainfall in mm over {totals.Period.ToSettingText()}; blank where withheld";
+        var caption = $"Total areal rainfall in mm over {totals.Period.ToSettingText()}; blank where withheld. {from}";
         var basins = totals.Basins.Basins;
         var periods = totals.Starts.Select(totals.Period.NameOf).ToArray();
         string Cell(int p, int b) => totals.At(p, b).DepthMillimetres is { } depth ? Html.Number(depth, "N1") : "";
@@ -193,11 +209,11 @@ internal static class SummaryPage
         }
     }
 
-    private static void WeightsSection(Html page, WeightTable weights)
+    private static void WeightsSection(Html page, WeightTable weights, string from)
     {
         page.Element("h2", "Weights");
         page.Table(
-            "Share of each basin that is nearest to each gauge",
+            $"Share of each basin that is nearest to each gauge. {from}",
             ["basin", "gauge", ">area km²", ">weight"],
             weights
                 .Weights.Take(MostRows)
@@ -276,11 +292,11 @@ internal static class SummaryPage
         var settings = string.Concat(
             record
                 .Settings.Where(setting => !setting.IsDefault)
-                .Select(setting => $" --set {setting.Name}={setting.Value}")
+                .Select(setting => $" --set {ShellWord.Of($"{setting.Name}={setting.Value}")}")
         );
         page.Element(
             "pre",
-            $"recipe-runner run data/recipe/{record.RecipeName} --data data/inputs --into ../again.study{settings}"
+            $"recipe-runner run {ShellWord.Of($"data/recipe/{record.RecipeName}")} --data {(record.Inputs.IsEmpty ? "data/recipe" : "data/inputs")} --into ../again.study{settings}"
         );
         page.Element("p", $"Made with Recipe Runner {ToolVersion.Text}.");
     }

@@ -21,13 +21,13 @@ public enum ArealStatus : byte
 }
 
 /// <summary>Mean areal rainfall of one basin over one step, with what it rests on.</summary>
-/// <param name="DepthMillimetres">The depth; 0 where withheld.</param>
+/// <param name="DepthMillimetres">The depth; null where withheld, which is not zero.</param>
 /// <param name="Status">Whether the value was given.</param>
 /// <param name="GaugesReporting">Gauges of the full network's weights that reported.</param>
 /// <param name="WeightReporting">The share of the basin's weight in the full network that reported, 0 to 1.</param>
 /// <param name="NearestReportingMetres">Distance from the basin (0 inside) to the nearest reporting gauge; null where none reported.</param>
 public readonly record struct ArealValue(
-    double DepthMillimetres,
+    double? DepthMillimetres,
     ArealStatus Status,
     int GaugesReporting,
     double WeightReporting,
@@ -119,13 +119,13 @@ public sealed class ArealRainfall : Artifact, ITabular
 
     private Column DepthColumn(Basin basin, int b) =>
         Column.OfNumbers(
-            basin.Id,
+            ColumnName(basin.Id),
             "mm",
             6,
             $"Mean areal rainfall of {basin.Name}; blank where withheld",
-            Enumerable.Range(0, Labels.Length).Select(t => Depth(At(t, b)))
+            Enumerable.Range(0, Labels.Length).Select(t => At(t, b).DepthMillimetres)
         );
 
-    private static double? Depth(ArealValue value) =>
-        value.Status == ArealStatus.Withheld ? null : value.DepthMillimetres;
+    /// <summary>The basin's id, told apart from the columns that every such table has.</summary>
+    private static string ColumnName(string id) => id is "start" or "end" ? $"{id} (basin)" : id;
 }

@@ -58,7 +58,7 @@ public sealed class ArealTotals : Artifact, ITabular
             .. Basins.Basins.Select(
                 (basin, b) =>
                     Column.OfNumbers(
-                        basin.Id,
+                        basin.Id == "period" ? "period (basin)" : basin.Id,
                         "mm",
                         6,
                         $"Total areal rainfall of {basin.Name}; blank where withheld",

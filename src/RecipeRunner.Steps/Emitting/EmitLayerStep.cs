@@ -19,9 +19,14 @@ public sealed record EmitLayerStep(IMapLayer Layer, string Name) : Step<EmittedF
     public override EmittedFiles Execute(StepContext context)
     {
         var features = Layer.ToFeatures();
-        var paths = Name.EndsWith(GeoJsonEnding, StringComparison.Ordinal)
-            ? GeoJsonLayer.Write(context, Name, features, Layer.ReferenceSystem)
-            : ShapefileLayer.Write(context, Name, features, Layer.ReferenceSystem);
+        var paths = Name.EndsWith(GeoJsonEnding, StringComparison.OrdinalIgnoreCase)
+            ? GeoJsonLayer.Write(
+                context,
+                Name[..^GeoJsonEnding.Length] + GeoJsonEnding,
+                features,
+                Layer.ReferenceSystem
+            )
+            : ShapefileLayer.Write(context, EmittedName.Without(Name, ".shp"), features, Layer.ReferenceSystem);
         return new EmittedFiles([.. paths], features.Shapes.Length, "features");
     }
 }

@@ -20,7 +20,8 @@ public sealed record EmitTableStep(ITabular Table, string Name) : Step<EmittedFi
     public override EmittedFiles Execute(StepContext context)
     {
         var table = Table.ToTable();
-        string[] paths = [$"tables/{Name}.csv", $"tables/{Name}.columns.csv"];
+        var name = EmittedName.Without(Name, ".csv");
+        string[] paths = [$"tables/{name}.csv", $"tables/{name}.columns.csv"];
         Write(context, paths[0], table);
         Write(context, paths[1], Meanings(table));
         return new EmittedFiles([.. paths], table.RowCount, "rows");

@@ -29,6 +29,7 @@ internal static class ShapefileLayer
     )
     {
         var names = FieldNames(context, name, features.Attributes);
+        RequireRoom(name, features.Attributes);
         using var shp = new MemoryStream();
         using var shx = new MemoryStream();
         using var dbf = new MemoryStream();
@@ -44,6 +45,27 @@ internal static class ShapefileLayer
             Put(context, $"layers/{name}.prj", Encoding.UTF8.GetBytes(system.Wkt)),
             Put(context, $"layers/{name}.cpg", "UTF-8"u8.ToArray()),
         ];
+    }
+
+    private static void RequireRoom(string layer, Table table)
+    {
+        var problems = new Problems();
+        foreach (var column in table.Columns)
+        {
+            foreach (var text in column.Texts.Where(text => Encoding.UTF8.GetByteCount(text) > LongestText))
+            {
+                problems.Add(
+                    "RR0604",
+                    new Place($"layers/{layer}.shp", Item: $"column {column.Name}"),
+                    FormattableString.Invariant(
+                        $"A shapefile holds at most {LongestText} bytes of text a cell; '{text[..20]}…' has {Encoding.UTF8.GetByteCount(text)}."
+                    ),
+                    $"Emit \"{layer}.geojson\" instead, or shorten the text."
+                );
+            }
+        }
+
+        problems.ThrowIfAny();
     }
 
     private static void WriteFeatures(

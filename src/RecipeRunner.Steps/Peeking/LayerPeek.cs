@@ -31,12 +31,7 @@ internal static class LayerPeek
                     )
                 )
             ),
-            (
-                "system",
-                file.ReferenceSystem is { } system
-                    ? $"{system.Label}, {system.Name}"
-                    : "not said by the file; give crs: when reading"
-            ),
+            ("system", SystemText(file)),
             ("extent", ExtentText(file.Extent)),
         ];
         if (invalid.Length > 0)
@@ -55,6 +50,11 @@ internal static class LayerPeek
         lines.AddRange(file.Fields.Select((field, f) => ("column", ColumnText(file, field, f))));
         return lines;
     }
+
+    private static string SystemText(FeatureFile file) =>
+        file.ReferenceSystem is { } system ? $"{system.Label}, {system.Name}"
+        : file.SystemRefusal is { } refusal ? $"{refusal.Problems[0].What} Give crs: when reading."
+        : "not said by the file; give crs: when reading";
 
     private static string ColumnText(FeatureFile file, string field, int f)
     {

@@ -36,7 +36,7 @@ internal static class TablePeek
     private static List<(string Name, string Text)> OfRecords(StepContext context, string name, PeekColumn[] columns)
     {
         var time = LabelReader.LooksLikeTime(columns[0].First) ? columns[0] : columns[1];
-        var step = time.First.Length == "2024-01".Length ? TimeStep.Months : TimeStep.Days("24:00");
+        var step = StepOf(time.First);
         var markers = columns
             .Where(column => column != time)
             .SelectMany(column => column.Markers)
@@ -61,7 +61,7 @@ internal static class TablePeek
                 "span",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{step.LabelText(records.Labels[0])} to {step.LabelText(records.Labels[^1])}, {records.Labels.Length:N0} steps of {(step == TimeStep.Months ? "a month" : "a day")}"
+                    $"{step.LabelText(records.Labels[0])} to {step.LabelText(records.Labels[^1])}, {records.Labels.Length:N0} steps, as {step.ToSettingText()}"
                 )
             ),
             (
@@ -85,6 +85,13 @@ internal static class TablePeek
         lines.Add(("largest", Largest(records)));
         return lines;
     }
+
+    /// <summary>Months where the label is a month, else days that end at the label's time; a date alone is taken as the day.</summary>
+    private static TimeStep StepOf(string label) =>
+        label.Length == "2024-01".Length ? TimeStep.Months
+        : label.Length >= "2024-01-31T09:00".Length
+            ? TimeStep.Days(label.Substring("2024-01-31T".Length, "09:00".Length))
+        : TimeStep.Days("24:00");
 
     private static string Largest(RainRecords records)
     {

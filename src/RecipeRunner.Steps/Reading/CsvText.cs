@@ -13,14 +13,7 @@ internal static class CsvText
         Utf8Text.Require(stream, name);
         if (stream.Length == 0)
         {
-            throw new RefusedException(
-                Finding.Error(
-                    "RR0201",
-                    new Place(name),
-                    "The file is empty.",
-                    "Was it copied whole? A table starts with a header line that names its columns."
-                )
-            );
+            throw Empty(name);
         }
 
         return Sep.Reader(options =>
@@ -35,12 +28,18 @@ internal static class CsvText
             .From(stream);
     }
 
-    /// <summary>Reads the header: column names without the blanks around them. The reader then stands before the first row.</summary>
+    /// <summary>Reads the header: column names without the blanks around them; nameless columns at the
+    /// end, which spreadsheets leave, are not counted. The reader then stands before the first row.</summary>
     /// <exception cref="RefusedException">Two columns have one name.</exception>
     public static string[] Names(SepReader reader, string name)
     {
-        reader.MoveNext();
+        if (!reader.MoveNext())
+        {
+            throw Empty(name);
+        }
+
         var names = reader.Current[..].ToStringsArray().Select(column => column.Trim()).ToArray();
+        names = names[..(Array.FindLastIndex(names, column => column.Length > 0) + 1)];
         var twins = names
             .Where(column => column.Length > 0)
             .GroupBy(column => column, StringComparer.Ordinal)
@@ -60,4 +59,31 @@ internal static class CsvText
         problems.ThrowIfAny();
         return names;
     }
+
+    /// <summary>True for an empty line, which says nothing.</summary>
+    public static bool IsBlank(SepReader.Row row) => row.ColCount == 1 && row[0].Span.Trim().IsEmpty;
+
+    /// <summary>True where a row has a cell for each named column; cells beyond them are blank.</summary>
+    public static bool Fits(SepReader.Row row, int columns)
+    {
+        for (var column = columns; column < row.ColCount; column++)
+        {
+            if (!row[column].Span.Trim().IsEmpty)
+            {
+                return false;
+            }
+        }
+
+        return row.ColCount >= columns;
+    }
+
+    private static RefusedException Empty(string name) =>
+        new(
+            Finding.Error(
+                "RR0201",
+                new Place(name),
+                "The file is empty.",
+                "Was it copied whole? A table starts with a header line that names its columns."
+            )
+        );
 }

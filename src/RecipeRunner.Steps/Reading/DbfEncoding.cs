@@ -16,6 +16,11 @@ internal static class DbfEncoding
     {
         [0x01] = 437,
         [0x02] = 850,
+        [0x13] = 932,
+        [0x26] = 866,
+        [0x4D] = 936,
+        [0x4E] = 949,
+        [0x4F] = 950,
         [0x03] = 1252,
         [0x57] = 1252,
         [0x58] = 1252,
@@ -23,6 +28,8 @@ internal static class DbfEncoding
         [0x64] = 852,
         [0x65] = 866,
         [0x6B] = 857,
+        [0x7A] = 936,
+        [0x7B] = 932,
         [0x87] = 852,
         [0x88] = 857,
         [0xC8] = 1250,
@@ -32,11 +39,12 @@ internal static class DbfEncoding
     };
 
     /// <summary>The encoding.</summary>
+    /// <param name="context">Takes the finding about a guess.</param>
     /// <param name="name">The shapefile.</param>
     /// <param name="dbf">Its attribute file.</param>
     /// <param name="cpg">The text of its <c>.cpg</c>; null where there is none.</param>
     /// <exception cref="RefusedException">The <c>.cpg</c> names no known encoding, or the text does not fit UTF-8 that it names.</exception>
-    public static Encoding Find(string name, byte[] dbf, string? cpg)
+    public static Encoding Find(StepContext context, string name, byte[] dbf, string? cpg)
     {
         Encoding.RegisterProvider(CodePagesEncodingProvider.Instance);
         if (cpg is not null)
@@ -44,12 +52,40 @@ internal static class DbfEncoding
             return Stated(name, dbf, cpg.Trim('\uFEFF', ' ', '\r', '\n', '\t', '\0'));
         }
 
-        if (Languages.TryGetValue(dbf[LanguageByte], out var page))
+        var language = dbf[LanguageByte];
+        return language == 0 ? Guessed(context, name, dbf) : ByLanguage(name, language);
+    }
+
+    private static Encoding ByLanguage(string name, byte language) =>
+        Languages.TryGetValue(language, out var page)
+            ? Encoding.GetEncoding(page)
+            : throw new RefusedException(
+                Finding.Error(
+                    "RR0219",
+                    new Place(name[..^3] + "dbf"),
+                    FormattableString.Invariant(
+                        $"Its header names the language 0x{language:X2}, whose encoding is not known."
+                    ),
+                    "Write the encoding into a .cpg file beside it, such as UTF-8 or 1252."
+                )
+            );
+
+    private static Encoding Guessed(StepContext context, string name, byte[] dbf)
+    {
+        if (System.Text.Unicode.Utf8.IsValid(Rows(dbf)))
         {
-            return Encoding.GetEncoding(page);
+            return Encoding.UTF8;
         }
 
-        return System.Text.Unicode.Utf8.IsValid(Rows(dbf)) ? Encoding.UTF8 : Encoding.GetEncoding(1252);
+        context.Find(
+            Finding.Notice(
+                "RR0218",
+                new Place(name[..^3] + "dbf"),
+                "It does not say its text encoding and is not UTF-8, so it was read as Windows-1252.",
+                "Check the names; write the true encoding into a .cpg file beside it."
+            )
+        );
+        return Encoding.GetEncoding(1252);
     }
 
     private static Encoding Stated(string name, byte[] dbf, string label)

@@ -81,8 +81,9 @@ internal sealed class DepthReader(string file, RainUnit unit, ImmutableArray<str
 
     private double? Refuse(string text, int line, int column, string gauge, Problems problems)
     {
-        var mend = text.Any(char.IsAsciiLetter)
-            ? $"If it marks a missing value, add   missing: [\"{text}\"]"
+        var mend =
+            text is "T" or "t" or "Tr" or "tr" ? "If it marks a trace, too little to measure, write 0 in its place."
+            : text.Any(char.IsAsciiLetter) ? $"If it marks a missing value, add   missing: [\"{text}\"]"
             : NumberText.Mend(text);
         problems.Add("RR0250", new Place(file, line, column, $"gauge {gauge}"), $"'{text}' is not a depth.", mend);
         return null;

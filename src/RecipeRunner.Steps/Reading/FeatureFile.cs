@@ -16,11 +16,13 @@ internal sealed record FileFeature(int Number, Geometry? Geometry, ImmutableArra
 /// <param name="Fields">Names of the attributes.</param>
 /// <param name="Features">The features, in the file's order.</param>
 /// <param name="ReferenceSystem">The system that the file says it is in; null where it says nothing.</param>
+/// <param name="SystemRefusal">Why what the file says cannot be used; null where it can.</param>
 internal sealed record FeatureFile(
     string Name,
     ImmutableArray<string> Fields,
     ImmutableArray<FileFeature> Features,
-    ReferenceSystem? ReferenceSystem
+    ReferenceSystem? ReferenceSystem,
+    RefusedException? SystemRefusal
 )
 {
     /// <summary>Reads a shapefile or GeoJSON file, told apart by its ending.</summary>
@@ -44,7 +46,7 @@ internal sealed record FeatureFile(
     /// <param name="given">What the recipe says; null for nothing.</param>
     /// <exception cref="RefusedException">Neither says anything.</exception>
     public ReferenceSystem SystemOr(ReferenceSystem? given) =>
-        given ?? ReferenceSystem ?? throw MissingSystem.Refusal(Name, Extent);
+        given ?? ReferenceSystem ?? throw SystemRefusal ?? MissingSystem.Refusal(Name, Extent);
 
     /// <summary>The index of a field.</summary>
     /// <exception cref="RefusedException">There is none of that name.</exception>
@@ -57,4 +59,17 @@ internal sealed record FeatureFile(
             .Where(geometry => geometry is { IsEmpty: false })
             .Select(geometry => geometry!.EnvelopeInternal)
             .Aggregate(Bounds.Empty, (bounds, box) => bounds.With(new Bounds(box.MinX, box.MinY, box.MaxX, box.MaxY)));
+
+    /// <summary>Reads what the file says of its system; a refusal waits until it is known whether the recipe says it instead.</summary>
+    public static (ReferenceSystem? System, RefusedException? Refusal) ReadSystem(Func<ReferenceSystem?> read)
+    {
+        try
+        {
+            return (read(), null);
+        }
+        catch (RefusedException refusal)
+        {
+            return (null, refusal);
+        }
+    }
 }

@@ -1,6 +1,5 @@
 using System.Collections.Immutable;
 using NetTopologySuite.Geometries;
-using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Steps.Reading;
@@ -19,8 +18,8 @@ internal sealed record GaugeRow(
 
 /// <summary>Gauge rows of a text table, or of the points of a layer file.</summary>
 /// <param name="Rows">The rows.</param>
-/// <param name="ReferenceSystem">The system that the file says it is in; null where it says nothing.</param>
-internal sealed record GaugeRows(ImmutableArray<GaugeRow> Rows, ReferenceSystem? ReferenceSystem)
+/// <param name="Layer">The layer file; null for a text table, which says no reference system.</param>
+internal sealed record GaugeRows(ImmutableArray<GaugeRow> Rows, FeatureFile? Layer)
 {
     /// <summary>Reads the rows of a text table.</summary>
     public static GaugeRows OfTable(StepContext context, ReadGaugesStep step)
@@ -49,7 +48,12 @@ internal sealed record GaugeRows(ImmutableArray<GaugeRow> Rows, ReferenceSystem?
         foreach (var row in reader)
         {
             var place = new Place(step.File, row.LineNumberFrom);
-            if (row.ColCount != names.Length)
+            if (CsvText.IsBlank(row))
+            {
+                continue;
+            }
+
+            if (!CsvText.Fits(row, names.Length))
             {
                 problems.Add(
                     "RR0241",
@@ -90,7 +94,7 @@ internal sealed record GaugeRows(ImmutableArray<GaugeRow> Rows, ReferenceSystem?
             .OfType<GaugeRow>()
             .ToImmutableArray();
         problems.ThrowIfAny();
-        return new GaugeRows(rows, file.ReferenceSystem);
+        return new GaugeRows(rows, file);
     }
 
     private static GaugeRow? OfFeature(

@@ -50,7 +50,8 @@ internal static class GeoJsonSource
             .Select((feature, i) => FeatureOf(feature, i + 1, fields, name, problems))
             .ToImmutableArray();
         problems.ThrowIfAny();
-        return new FeatureFile(name, fields, features, SystemOf(root, name));
+        var (system, refusal) = FeatureFile.ReadSystem(() => SystemOf(root, name));
+        return new FeatureFile(name, fields, features, system, refusal);
     }
 
     private static JsonDocument Parse(StepContext context, string name)

@@ -7,7 +7,7 @@ namespace RecipeRunner.Steps.Reading;
 
 /// <summary>
 /// Reads the label of a time step: <c>2024-01-31</c> for days, <c>2024-01</c> for months (ISO 8601), or the local date and
-/// time at which the step ends.
+/// time at which an observation day ends. Midnight is refused for calendar days and months: it may mean either end.
 /// </summary>
 internal sealed class LabelReader(string file, TimeStep step)
 {
@@ -66,17 +66,21 @@ internal sealed class LabelReader(string file, TimeStep step)
 
     private LocalDate? EndingAt(LocalDateTime time, string text, Place place, Problems problems)
     {
-        LocalDate[] candidates = months ? [time.Date, time.Date.PlusMonths(-1)] : [time.Date, time.Date.PlusDays(-1)];
-        foreach (var label in candidates.Where(label => step.IntervalOf(label).End == time))
+        if (!months && step.IntervalOf(time.Date).End == time)
         {
-            return months ? label.With(DateAdjusters.StartOfMonth) : label;
+            return time.Date;
         }
 
+        var atMidnight = time.TimeOfDay == LocalTime.Midnight;
         problems.Add(
             "RR0253",
             place,
-            $"'{text}' is not the end of a step of {step.ToSettingText()}.",
-            "Give the step that the file has, such as TimeStep.Days(endingAt: \"07:00\")."
+            atMidnight
+                ? $"'{text}' may mean the start or the end of a step of {step.ToSettingText()}."
+                : $"'{text}' is not the end of a step of {step.ToSettingText()}.",
+            atMidnight
+                ? "Write the date alone (2024-01-31) where it names the day or month; where days end at midnight and are dated by the morning, read with TimeStep.Days(endingAt: \"00:00\")."
+                : "Give the step that the file has, such as TimeStep.Days(endingAt: \"07:00\")."
         );
         return null;
     }

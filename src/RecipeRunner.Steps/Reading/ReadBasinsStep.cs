@@ -49,6 +49,18 @@ public sealed record ReadBasinsStep(string File, string Id, string? Name, Refere
 
     private void TellOfOverride(StepContext context, FeatureFile file)
     {
+        if (Crs is not null && file.SystemRefusal is { } refusal)
+        {
+            context.Find(
+                Finding.Caution(
+                    "RR0235",
+                    new Place(File),
+                    $"What the file says of its system cannot be used; the recipe says {Crs.Label}, which is. {refusal.Problems[0].What}",
+                    "Make sure that the recipe is right."
+                )
+            );
+        }
+
         if (Crs is not null && file.ReferenceSystem is { } own && !own.IsSameAs(Crs))
         {
             context.Find(

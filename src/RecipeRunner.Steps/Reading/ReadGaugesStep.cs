@@ -48,7 +48,7 @@ public sealed record ReadGaugesStep(
         var places = rows.Rows.Select(row => Coordinates(row, problems)).ToArray();
         problems.ThrowIfAny();
         var extent = Bounds.Of(places);
-        var system = Crs ?? rows.ReferenceSystem ?? throw MissingSystem.Refusal(File, extent);
+        var system = rows.Layer?.SystemOr(Crs) ?? Crs ?? throw MissingSystem.Refusal(File, extent);
         var gauges = rows.Rows.Zip(places, (row, place) => GaugeOf(row, place, system, problems)).ToImmutableArray();
         problems.ThrowIfAny();
         return new GaugeNetwork(gauges, system, File);

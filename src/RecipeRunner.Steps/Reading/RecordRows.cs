@@ -16,8 +16,13 @@ internal static class RecordRows
         var count = 0;
         foreach (var row in reader)
         {
+            if (CsvText.IsBlank(row))
+            {
+                continue;
+            }
+
             take ??= FormOf(row, names, table);
-            if (row.ColCount == names.Length)
+            if (CsvText.Fits(row, names.Length))
             {
                 take(row);
             }
@@ -46,7 +51,7 @@ internal static class RecordRows
             return Wide(names, table);
         }
 
-        if (names.Length == 3 && row.ColCount == 3 && LabelReader.LooksLikeTime(row[1].ToString().Trim()))
+        if (names.Length == 3 && row.ColCount >= 3 && LabelReader.LooksLikeTime(row[1].ToString().Trim()))
         {
             return table.AddLong;
         }

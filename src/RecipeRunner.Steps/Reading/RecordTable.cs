@@ -11,6 +11,8 @@ namespace RecipeRunner.Steps.Reading;
 /// <summary>Gathers the rows of a record file, in any order, and makes records of unbroken steps of them.</summary>
 internal sealed class RecordTable(string file, TimeStep step, DepthReader depths)
 {
+    private const int LongestYears = 400;
+
     private readonly LabelReader labels = new(file, step);
     private readonly Dictionary<string, int> gauges = new(StringComparer.Ordinal);
     private readonly Dictionary<LocalDate, List<Cell>> rows = [];
@@ -158,9 +160,23 @@ internal sealed class RecordTable(string file, TimeStep step, DepthReader depths
     /// <summary>Every label from the first to the last.</summary>
     private ImmutableArray<LocalDate> Span()
     {
-        var last = rows.Keys.Max();
+        var (first, last) = (rows.Keys.Min(), rows.Keys.Max());
+        if (Period.Between(first, last, PeriodUnits.Years).Years > LongestYears)
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0259",
+                    new Place(file),
+                    FormattableString.Invariant(
+                        $"Its times run from {step.LabelText(first)} to {step.LabelText(last)}, more than {LongestYears} years."
+                    ),
+                    "Look for a year that was mistyped."
+                )
+            );
+        }
+
         var span = ImmutableArray.CreateBuilder<LocalDate>();
-        for (var label = rows.Keys.Min(); label <= last; label = step.Next(label))
+        for (var label = first; label <= last; label = step.Next(label))
         {
             span.Add(label);
         }

@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using System.Globalization;
 using System.Text;
+using NetTopologySuite.Geometries;
 using NetTopologySuite.IO.Esri;
 using NetTopologySuite.IO.Esri.Shapefiles.Readers;
 using RecipeRunner.Model.Steps;
@@ -24,8 +25,9 @@ internal static class ShapefileSource
         var shx = ReadAll(context, Sibling(context, stem, "shx", name));
         var dbf = ReadAll(context, Sibling(context, stem, "dbf", name));
         ShapefileCheck.Require(name, shp, shx, dbf);
-        var encoding = DbfEncoding.Find(name, dbf, TextOf(context, stem, "cpg"));
-        var system = TextOf(context, stem, "prj") is { } prj ? PrjReader.Match(prj, stem + ".prj") : null;
+        var encoding = DbfEncoding.Find(context, name, dbf, TextOf(context, stem, "cpg"));
+        var prj = TextOf(context, stem, "prj");
+        var (system, refusal) = FeatureFile.ReadSystem(() => prj is null ? null : PrjReader.Match(prj, stem + ".prj"));
         var options = new ShapefileReaderOptions
         {
             Encoding = encoding,
@@ -49,14 +51,14 @@ internal static class ShapefileSource
             context.Cancellation.ThrowIfCancellationRequested();
             if (!deleted)
             {
-                var geometry = reader.Geometry is { IsEmpty: false } shape ? shape.Copy() : null;
+                var geometry = reader.Geometry is { IsEmpty: false } shape ? Own(shape) : null;
                 features.Add(
                     new FileFeature(number, geometry, [.. reader.Fields.Select(field => TextOf(field.Value))])
                 );
             }
         }
 
-        return new FeatureFile(name, fields, features.ToImmutable(), system);
+        return new FeatureFile(name, fields, features.ToImmutable(), system, refusal);
     }
 
     /// <summary>Whatever the library throws over a damaged file is told as the damage that it is.</summary>
@@ -78,6 +80,10 @@ internal static class ShapefileSource
             );
         }
     }
+
+    /// <summary>A copy that the reader does not write over, its rings put together by what lies in what.</summary>
+    private static Geometry Own(Geometry shape) =>
+        shape is Polygon or MultiPolygon ? RingNesting.Assemble(RingNesting.RingsOf(shape.Copy())) : shape.Copy();
 
     private static string TextOf(object? value) =>
         value switch

@@ -54,7 +54,7 @@ internal sealed class ArealCalculation
             );
         if (withheld)
         {
-            return new ArealValue(0, ArealStatus.Withheld, count, share, nearest);
+            return new ArealValue(null, ArealStatus.Withheld, count, share, nearest);
         }
 
         var depth =

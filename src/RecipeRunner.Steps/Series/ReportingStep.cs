@@ -1,6 +1,7 @@
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Series;
 
@@ -16,6 +17,7 @@ public sealed record ReportingStep(GaugeNetwork Gauges, RainRecords Rain) : Step
     {
         var columns = RecordColumns.Match(context, Gauges, Rain);
         var live = Gauges.Gauges.Where((_, gauge) => columns[gauge] >= 0 && ReportsAlways(columns[gauge])).ToArray();
+        TellOfLeftOut(context, live);
         return live.Length > 0
             ? new GaugeNetwork(live, Gauges.ReferenceSystem, Gauges.Source)
             : throw new RefusedException(
@@ -26,6 +28,21 @@ public sealed record ReportingStep(GaugeNetwork Gauges, RainRecords Rain) : Step
                     "Take fewer steps."
                 )
             );
+    }
+
+    private void TellOfLeftOut(StepContext context, Gauge[] live)
+    {
+        var silent = Gauges.Gauges.Except(live).Select(gauge => gauge.Id).ToArray();
+        if (silent.Length > 0)
+        {
+            context.Find(
+                Finding.Notice(
+                    "RR0519",
+                    new Place(Rain.Source),
+                    $"Left out, because silent at some step from {Rain.Step.LabelText(Rain.Labels[0])} to {Rain.Step.LabelText(Rain.Labels[^1])}: {Listing.Of(silent)}."
+                )
+            );
+        }
     }
 
     private bool ReportsAlways(int column) =>

@@ -1,9 +1,9 @@
 using System.Collections.Immutable;
-using System.Globalization;
 using NodaTime;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Series;
 
@@ -40,13 +40,15 @@ public sealed record TotalStep(ArealRainfall Areal, Every Period, AtLeast Comple
             .ToLookup(pair => pair.Start, pair => pair.t);
         var basins = Areal.Basins.Basins.Length;
         var totals = starts
-            .SelectMany(start =>
-                Enumerable.Range(0, basins).Select(basin => TotalOf(basin, steps[start], ExpectedFrom(start)))
+            .Select(start => (Steps: steps[start].ToArray(), Expected: ExpectedFrom(start)))
+            .SelectMany(period =>
+                Enumerable.Range(0, basins).Select(basin => TotalOf(basin, period.Steps, period.Expected))
             )
             .ToArray();
         context.Assume("A step's rain belongs to the period that holds the date under which it is recorded.");
-        TellOfShortSums(context, totals);
-        return new ArealTotals(Areal.Basins, Period, starts, totals);
+        var result = new ArealTotals(Areal.Basins, Period, starts, totals);
+        TellOfShortSums(context, result);
+        return result;
     }
 
     private LocalDate StartOf(LocalDate label) => Period.StartOf(label, Areal.Labels[0]);
@@ -67,11 +69,9 @@ public sealed record TotalStep(ArealRainfall Areal, Every Period, AtLeast Comple
     {
         var sum = default(SteadySum);
         var present = 0;
-        foreach (
-            var value in steps.Select(t => Areal.At(t, basin)).Where(value => value.Status != ArealStatus.Withheld)
-        )
+        foreach (var depth in steps.Select(t => Areal.At(t, basin).DepthMillimetres).OfType<double>())
         {
-            sum.Add(value.DepthMillimetres);
+            sum.Add(depth);
             present++;
         }
 
@@ -79,37 +79,46 @@ public sealed record TotalStep(ArealRainfall Areal, Every Period, AtLeast Comple
         return new ArealTotal(enough ? sum.Value : null, present, expected);
     }
 
-    private void TellOfShortSums(StepContext context, ArealTotal[] totals)
+    private void TellOfShortSums(StepContext context, ArealTotals totals)
     {
-        var shorts = totals.Count(total =>
-            total.DepthMillimetres is not null && total.StepsWithValue < total.StepsExpected
-        );
-        if (shorts > 0)
+        var named = Enumerable
+            .Range(0, totals.Starts.Length)
+            .SelectMany(p =>
+                Areal.Basins.Basins.Select(
+                    (basin, b) => (Name: $"{basin.Id} {Period.NameOf(totals.Starts[p])}", Total: totals.At(p, b))
+                )
+            )
+            .Where(pair => pair.Total.StepsWithValue < pair.Total.StepsExpected)
+            .Select(pair =>
+                (
+                    Text: FormattableString.Invariant(
+                        $"{pair.Name} ({pair.Total.StepsWithValue} of {pair.Total.StepsExpected})"
+                    ),
+                    pair.Total.DepthMillimetres
+                )
+            )
+            .ToArray();
+        var shorts = named.Where(pair => pair.DepthMillimetres is not null).Select(pair => pair.Text).ToArray();
+        if (shorts.Length > 0)
         {
             context.Find(
                 Finding.Caution(
                     "RR0505",
-                    Place.Of("totals"),
-                    string.Create(
-                        CultureInfo.InvariantCulture,
-                        $"{shorts} totals leave out steps without a value, so they may be too low."
-                    ),
-                    "Ask for complete: AtLeast.Percent(100) to withhold them."
+                    Place.Of($"totals over {Period.ToSettingText()}"),
+                    $"Some leave out steps without a value, so they may be too low: {Listing.Of(shorts)}.",
+                    "Emit totals.Completeness() to see all, or ask for complete: AtLeast.Percent(100) to withhold them."
                 )
             );
         }
 
-        var withheld = totals.Count(total => total.DepthMillimetres is null);
-        if (withheld > 0)
+        var withheld = named.Where(pair => pair.DepthMillimetres is null).Select(pair => pair.Text).ToArray();
+        if (withheld.Length > 0)
         {
             context.Find(
                 Finding.Notice(
                     "RR0506",
-                    Place.Of("totals"),
-                    string.Create(
-                        CultureInfo.InvariantCulture,
-                        $"{withheld} of {totals.Length} totals are withheld: {Complete.ToSettingText()} of their steps must have a value."
-                    ),
+                    Place.Of($"totals over {Period.ToSettingText()}"),
+                    $"Withheld, because {Complete.ToSettingText()} of their steps must have a value: {Listing.Of(withheld)}.",
                     "The record may begin or end within a period, or values were withheld for want of gauges."
                 )
             );

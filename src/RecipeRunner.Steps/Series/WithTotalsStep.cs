@@ -3,6 +3,7 @@ using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Series;
 
@@ -35,7 +36,26 @@ public sealed record WithTotalsStep(BasinLayer Basins, ArealTotals Totals) : Ste
             );
         }
 
-        return Basins.WithColumns(Totals.Starts.Select((_, period) => ColumnOf(period, index)));
+        var columns = Totals.Starts.Select((_, period) => ColumnOf(period, index)).ToArray();
+        TellOfReplaced(context, columns);
+        return Basins.WithColumns(columns);
+    }
+
+    private void TellOfReplaced(StepContext context, Column[] columns)
+    {
+        var known = Basins.Columns.Select(column => column.Name).ToHashSet(StringComparer.Ordinal);
+        var replaced = columns.Select(column => column.Name).Where(known.Contains).ToArray();
+        if (replaced.Length > 0)
+        {
+            context.Find(
+                Finding.Caution(
+                    "RR0508",
+                    new Place(Basins.Source),
+                    $"The basins had {Listing.Of(replaced)} already; the later totals take their place.",
+                    "Join each kind of total to the basins on their own, and emit two layers."
+                )
+            );
+        }
     }
 
     private Column ColumnOf(int period, Dictionary<string, int> index)

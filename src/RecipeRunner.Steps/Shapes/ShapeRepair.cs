@@ -73,18 +73,17 @@ internal static class ShapeRepair
 
         var (before, after) = (geometry.Area, mended.Area);
         var areas = AreaWords(before, after, projected);
-        var near = string.Create(
-            CultureInfo.InvariantCulture,
-            $"{fault.Coordinate?.X ?? 0:0.######}, {fault.Coordinate?.Y ?? 0:0.######}"
-        );
-        var what = $"The outline is not valid ({fault.Message.ToLowerInvariant()}) near {near}.";
+        var near = fault.Coordinate is { } at
+            ? string.Create(CultureInfo.InvariantCulture, $" near {at.X:0.######}, {at.Y:0.######}")
+            : "";
+        var what = $"The outline is not valid ({fault.Message.ToLowerInvariant()}){near}.";
         if (!(after > 0) || Math.Abs(after - before) > LargestChange * after)
         {
             problems.Add(
                 "RR0231",
                 place,
-                $"{what} A repair by rule would change its area by more than 1 %: {areas}.",
-                "Mend the outline where it crosses itself, then run again."
+                $"{what} A repair by rule would change the area that its rings give by more than 1 %: {areas}.",
+                "Mend the outline there, then run again."
             );
             return null;
         }

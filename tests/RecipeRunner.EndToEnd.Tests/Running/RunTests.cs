@@ -91,7 +91,8 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
         using var tool = new Tool();
         tool.Run("run", DemoStudy.Recipe("wet-days"), "--data", DemoStudy.Data, "--set", "wet-from-mm=10")
             .ExitCode.ShouldBe(0);
-        File.ReadAllText(tool.PathOf("wet-days.study/data/summary.html")).ShouldContain("days of 10 mm or more");
+        File.ReadAllText(tool.PathOf("wet-days.study/data/summary.html"))
+            .ShouldContain("days with a value had 10 mm or more");
 
         var refused = tool.Run(
             "run",

@@ -119,6 +119,28 @@ public sealed class RecipeDiagnosticsTests : IDisposable
         Should.Throw<Model.Steps.RefusedException>(() => bench.Run(text)).Problems[0].Code.ShouldBe("RR0103");
 
     [Fact]
+    public void A_recipe_travels_byte_for_byte_and_must_be_utf8()
+    {
+        byte[] marked = [.. System.Text.Encoding.UTF8.Preamble, .. "Note(\"ä\");"u8];
+        File.WriteAllBytes(Path.Combine(bench.Folder, "marked.csx"), marked);
+        var request = new Host.Running.RunRequest(
+            Path.Combine(bench.Folder, "marked.csx"),
+            null,
+            bench.Study,
+            System.Collections.Immutable.ImmutableSortedDictionary<string, string>.Empty,
+            Replace: false
+        );
+        Host.Running.RecipeRun.Execute(request, Workbench.Language, new Workbench.SilentObserver(), default);
+        File.ReadAllBytes(Path.Combine(bench.Study, "data/recipe/marked.csx")).ShouldBe(marked);
+
+        File.WriteAllBytes(Path.Combine(bench.Folder, "marked.csx"), [.. "Note(\"\xE4\");"u8[..6], 0xE4, .. "\");"u8]);
+        Should
+            .Throw<Model.Steps.RefusedException>(() => RecipeText.Read(request.RecipePath))
+            .Problems[0]
+            .Code.ShouldBe("RR0104");
+    }
+
+    [Fact]
     public void A_missing_recipe_lists_those_that_are_near()
     {
         bench.Write("good.csx", "");

@@ -82,6 +82,16 @@ public sealed class SealTests : IDisposable
         page.ShouldNotContain("http:");
     }
 
+    [Theory]
+    [InlineData("plain-1.5", "--set s=plain-1.5")]
+    [InlineData("a b; rm 'x'", "--set &#39;s=a b; rm &#39;\\&#39;&#39;x&#39;\\&#39;&#39;&#39;")]
+    public void The_command_to_repeat_a_study_can_be_pasted(string value, string expected)
+    {
+        bench.Run("Setting(\"s\", \"\");", settings: [("s", value)]);
+
+        File.ReadAllText(Path.Combine(bench.Study, "data/summary.html")).ShouldContain(expected);
+    }
+
     [Fact]
     public void The_crate_describes_itself_and_lists_files_that_exist()
     {

@@ -64,6 +64,25 @@ public sealed class StudyFolderTests : IDisposable
     }
 
     [Fact]
+    public void A_folder_of_the_workshops_name_that_holds_other_things_is_left_alone()
+    {
+        bench.Write("out.study.making/notes.txt", "mine");
+
+        Should.Throw<RefusedException>(() => bench.Run(Good)).Problems[0].Code.ShouldBe("RR0706");
+        File.ReadAllText(bench.Study + ".making/notes.txt").ShouldBe("mine");
+    }
+
+    [Fact]
+    public void No_parent_folders_are_made()
+    {
+        Should
+            .Throw<RefusedException>(() => bench.Run(Good, into: Path.Combine(bench.Folder, "a/b/out.study")))
+            .Problems[0]
+            .Code.ShouldBe("RR0705");
+        bench.Leftovers().ShouldBeEmpty();
+    }
+
+    [Fact]
     public void What_a_killed_run_left_is_cleared_and_the_old_study_comes_back()
     {
         bench.Run(Good);

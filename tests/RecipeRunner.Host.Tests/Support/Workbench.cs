@@ -73,7 +73,7 @@ public sealed class Workbench : IDisposable
 
     public void Dispose() => Directory.Delete(Folder, recursive: true);
 
-    private sealed class SilentObserver : IRunObserver
+    public sealed class SilentObserver : IRunObserver
     {
         public void Titled(string title) { }
 

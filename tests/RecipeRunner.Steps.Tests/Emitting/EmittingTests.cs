@@ -88,6 +88,16 @@ public sealed class EmittingTests : IDisposable
     }
 
     [Fact]
+    public void Text_that_a_shapefile_would_cut_is_refused_and_known_endings_are_not_doubled()
+    {
+        var basins = bench.Basins((new string('ä', 200), Bench.Box(0, 0, 1, 1)));
+
+        Bench.Refused(() => bench.Verbs.EmitLayer(basins, "basins"))[0].Code.ShouldBe("RR0604");
+        bench.Verbs.EmitLayer(basins, "basins.GeoJSON").Paths.ShouldBe(["layers/basins.geojson"]);
+        bench.Verbs.EmitLayer(bench.Network(("A", 0, 0)), "gauges.shp").Paths[0].ShouldBe("layers/gauges.shp");
+    }
+
+    [Fact]
     public void Bytes_do_not_depend_on_the_clock()
     {
         bench.Verbs.EmitLayer(bench.Basins(("A", Bench.Box(0, 0, 1, 1))), "basins");

@@ -141,7 +141,7 @@ public sealed class HandbookTests : IDisposable
                 "example"
             )
         );
-        return weights.MeanRain(records, GapPolicy.Redraw).At(0, 0).DepthMillimetres;
+        return weights.MeanRain(records, GapPolicy.Redraw).At(0, 0).DepthMillimetres!.Value;
     }
 
     /// <summary>Metres in one unit of the example: 2²⁰ where coordinates are small, else 1.</summary>

@@ -57,7 +57,7 @@ public sealed class NorthCarolinaTests : IDisposable
         for (var b = 0; b < basins.Basins.Length; b++)
         {
             var mean = means[basins.Basins[b].Id];
-            areal.At(0, b).DepthMillimetres.ShouldBe(mean.Number("thiessen_mean_mm"), 1e-5);
+            areal.At(0, b).DepthMillimetres!.Value.ShouldBe(mean.Number("thiessen_mean_mm"), 1e-5);
             basins.Basins[b].Shape.Area.ShouldBe(mean.Number("area_m2"), 1e-7 * mean.Number("area_m2"));
         }
     }

@@ -28,6 +28,22 @@ public sealed class RecordTests : IDisposable
         records.StatusesAt(1).ToArray().ShouldBe([RecordStatus.Observed, RecordStatus.Observed]);
     }
 
+    [Theory]
+    [InlineData("date,A\n2024-01-01,1\n2024-01-02,2\n\n\n")]
+    [InlineData("date,A,,\n2024-01-01,1,,\n\n2024-01-02,2,,\n")]
+    public void Empty_lines_and_empty_columns_at_the_end_say_nothing(string text) =>
+        Read(text).Labels.Length.ShouldBe(2);
+
+    [Fact]
+    public void Midnight_is_refused_where_it_may_mean_either_end_of_a_step()
+    {
+        const string Text = "date,A\n2024-01-01 00:00:00,1\n";
+
+        Bench.Refused(() => Read(Text, TimeStep.Days("24:00")))[0].Code.ShouldBe("RR0253");
+        Bench.Refused(() => Read(Text, TimeStep.Months))[0].Code.ShouldBe("RR0253");
+        Read(Text, TimeStep.Days("00:00")).Labels[0].ShouldBe(new LocalDate(2024, 1, 1));
+    }
+
     [Fact]
     public void Units_are_exact_where_the_definition_is()
     {
@@ -65,7 +81,10 @@ public sealed class RecordTests : IDisposable
     [InlineData("date,A\n", "RR0256", 0, 0)]
     [InlineData("date,A,B\n2024-01-01,1\n", "RR0241", 2, 0)]
     [InlineData("date,A,A\n2024-01-01,1,2\n", "RR0202", 1, 3)]
-    [InlineData("date,A,\n2024-01-01,1,2\n", "RR0244", 1, 3)]
+    [InlineData("date,A,,B\n2024-01-01,1,2,3\n", "RR0244", 1, 3)]
+    [InlineData("date,A,\n2024-01-01,1,2\n", "RR0241", 2, 0)]
+    [InlineData("\uFEFF", "RR0201", 0, 0)]
+    [InlineData("date,A\n2024-01-01,1\n9024-01-01,1\n", "RR0259", 0, 0)]
     public void What_cannot_be_used_is_refused_at_its_place(string text, string code, int line, int column)
     {
         var problem = Bench.Refused(() => Read(text))[0];

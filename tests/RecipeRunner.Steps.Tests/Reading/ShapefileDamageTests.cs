@@ -174,6 +174,30 @@ public sealed class ShapefileDamageTests : IDisposable
         bench.Verbs.ReadBasins("nc.shp", id: "FIPS", name: "NAME").Basins[0].Name.ShouldBe("Märzgraben");
     }
 
+    [Fact]
+    public void A_guessed_encoding_is_a_notice_and_an_unknown_language_is_refused()
+    {
+        Rename("Märzgraben", latin: true);
+        Read();
+        bench.Study.Findings.Single().Code.ShouldBe("RR0218");
+
+        var path = Path.Combine(bench.Folder, "nc.dbf");
+        var dbf = File.ReadAllBytes(path);
+        dbf[29] = 0xF7;
+        File.WriteAllBytes(path, dbf);
+        Bench.Refused(() => Read())[0].Code.ShouldBe("RR0219");
+    }
+
+    [Fact]
+    public void A_prj_that_cannot_be_used_is_refused_unless_the_recipe_says_the_system()
+    {
+        bench.Write("nc.prj", "PROJCS[\"weird\"]");
+
+        Bench.Refused(() => Read())[0].Where.File.ShouldBe("nc.prj");
+        bench.Verbs.ReadBasins("nc.shp", id: "FIPS", crs: bench.Verbs.Crs("EPSG:4267")).Basins.Length.ShouldBe(100);
+        bench.Study.Findings.Single().Code.ShouldBe("RR0235");
+    }
+
     [Theory]
     [InlineData("UTF-8", "RR0216")]
     [InlineData("UTF-99", "RR0215")]

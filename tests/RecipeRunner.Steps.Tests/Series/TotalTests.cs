@@ -41,8 +41,9 @@ public sealed class TotalTests : IDisposable
 
         areal.Total(Every.Month).At(0, 0).ShouldBe(new ArealTotal(null, 30, 31));
         areal.Total(Every.Month, AtLeast.Percent(90)).At(0, 0).ShouldBe(new ArealTotal(30, 30, 31));
-        bench.Study.Findings.ShouldContain(finding => finding.Code == "RR0505");
-        bench.Study.Findings.ShouldContain(finding => finding.Code == "RR0506");
+        bench.Study.Findings.Single(finding => finding.Code == "RR0505").What.ShouldContain("box 2024-01 (30 of 31)");
+        bench.Study.Findings.First(finding => finding.Code == "RR0506").What.ShouldContain("box 2024-01 (30 of 31)");
+        areal.Total(Every.Month).Completeness().ToTable().Columns[2].Numbers.ShouldBe([30, 29]);
     }
 
     [Fact]
@@ -74,6 +75,9 @@ public sealed class TotalTests : IDisposable
 
         layer.Columns.Select(column => column.Name).ShouldBe(["rain_mm", "mm_2024_01"]);
         layer.Columns[1].Numbers[0].ShouldBe(31);
+        bench.Study.Findings.ShouldNotContain(finding => finding.Code == "RR0508");
+        layer.With(areal.Total());
+        bench.Study.Findings.ShouldContain(finding => finding.Code == "RR0508");
     }
 
     [Fact]

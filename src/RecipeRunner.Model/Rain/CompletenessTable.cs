@@ -1,0 +1,62 @@
+using System.Globalization;
+using RecipeRunner.Model.Space;
+using RecipeRunner.Model.Steps;
+
+namespace RecipeRunner.Model.Rain;
+
+/// <summary>What every total rests on: a row a basin and period.</summary>
+public sealed class CompletenessTable : Artifact, ITabular
+{
+    /// <summary>Creates the table.</summary>
+    /// <param name="totals">The totals.</param>
+    public CompletenessTable(ArealTotals totals) => Totals = totals;
+
+    /// <summary>The totals.</summary>
+    public ArealTotals Totals { get; }
+
+    /// <summary>Columns <c>basin, period, steps_with_value, steps_expected, total_mm</c>.</summary>
+    public Table ToTable()
+    {
+        var basins = Totals.Basins.Basins;
+        var rows = Enumerable
+            .Range(0, basins.Length)
+            .SelectMany(b =>
+                Enumerable.Range(0, Totals.Starts.Length).Select(p => (Basin: b, Period: p, Total: Totals.At(p, b)))
+            )
+            .ToArray();
+        return new Table([
+            Column.OfText("basin", "Basin id", rows.Select(row => basins[row.Basin].Id)),
+            Column.OfText(
+                "period",
+                "Period over which steps are summed",
+                rows.Select(row => Totals.Period.NameOf(Totals.Starts[row.Period]))
+            ),
+            Column.OfCounts(
+                "steps_with_value",
+                "",
+                "Steps that have a value",
+                rows.Select(row => row.Total.StepsWithValue)
+            ),
+            Column.OfCounts(
+                "steps_expected",
+                "",
+                "Steps that the period has by the calendar",
+                rows.Select(row => row.Total.StepsExpected)
+            ),
+            Column.OfNumbers(
+                "total_mm",
+                "mm",
+                6,
+                "Total areal rainfall; blank where withheld",
+                rows.Select(row => row.Total.DepthMillimetres)
+            ),
+        ]);
+    }
+
+    /// <inheritdoc/>
+    public override string Describe() =>
+        string.Create(CultureInfo.InvariantCulture, $"{Totals.Basins.Basins.Length * Totals.Starts.Length:N0} totals");
+
+    /// <inheritdoc/>
+    protected override void WriteCanonical(CanonicalWriter writer) => writer.Write(Totals);
+}
