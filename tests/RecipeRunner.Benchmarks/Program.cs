@@ -21,7 +21,7 @@ void Triangulate(int count, int rounds)
     string points = Path.Combine(folder, "points.bin");
     region.WritePoints(points);
     using var delaunator = new Baseline("node", "Baselines/delaunator.mjs", folder, points);
-    using var qhull = new Baseline("python3", "Baselines/qhull.py", points);
+    using var qhull = new Baseline("/usr/bin/python3", "Baselines/qhull.py", points);
     Contest.Run(
         string.Create(CultureInfo.InvariantCulture, $"Delaunay, {count:N0} uniform gauges, one thread"),
         rounds,
