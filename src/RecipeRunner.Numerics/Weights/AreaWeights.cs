@@ -73,18 +73,25 @@ public sealed class AreaWeights
         ArgumentOutOfRangeException.ThrowIfLessThan(threads, 1);
         const int ChunkSize = 64;
         var chunks = new WeightRows[(polygons.Count + ChunkSize - 1) / ChunkSize];
+        int next = -1;
+        int workers = Math.Min(threads, chunks.Length);
         Parallel.For(
             0,
-            chunks.Length,
+            workers,
             new ParallelOptions { MaxDegreeOfParallelism = threads },
-            () => new PolygonWeigher(cells.Graph, polygons),
-            (chunk, _, weigher) =>
+            _ =>
             {
-                int first = chunk * ChunkSize;
-                chunks[chunk] = weigher.Weigh(first, Math.Min(first + ChunkSize, polygons.Count));
-                return weigher;
-            },
-            _ => { }
+                var weigher = new PolygonWeigher(cells.Graph, polygons);
+                for (
+                    int chunk = Interlocked.Increment(ref next);
+                    chunk < chunks.Length;
+                    chunk = Interlocked.Increment(ref next)
+                )
+                {
+                    int first = chunk * ChunkSize;
+                    chunks[chunk] = weigher.Weigh(first, Math.Min(first + ChunkSize, polygons.Count));
+                }
+            }
         );
         List<PolygonRefusal> refusals = [.. chunks.SelectMany(chunk => chunk.Refusals)];
         return refusals.Count == 0
