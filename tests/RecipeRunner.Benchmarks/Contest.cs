@@ -2,53 +2,53 @@ using System.Globalization;
 
 namespace RecipeRunner.Benchmarks;
 
-/// <summary>Runs the tool and its baselines in turn, and prints medians and their ratio as a row of a table.</summary>
+/// <summary>One of those that are compared.</summary>
+internal sealed record Contender(string Name, Func<Sample> Run);
+
+/// <summary>Runs the tool and its baselines in turn, and prints medians and their ratios as rows of a table.</summary>
 internal static class Contest
 {
     /// <param name="work">What is done.</param>
     /// <param name="rounds">How often each runs, after one run each that does not count.</param>
-    /// <param name="tool">The tool.</param>
-    /// <param name="baselines">Each baseline's name and run.</param>
-    public static void Run(
-        string work,
-        int rounds,
-        Func<Sample> tool,
-        params (string Name, Func<Sample> Run)[] baselines
-    )
+    /// <param name="tools">Ways to run the tool.</param>
+    /// <param name="baselines">The baselines.</param>
+    public static void Run(string work, int rounds, Contender[] tools, Contender[] baselines)
     {
-        double expected = tool().Result;
-        foreach ((string name, Func<Sample> run) in baselines)
+        Contender[] all = [.. tools, .. baselines];
+        double[] results = [.. all.Select(contender => contender.Run().Result)];
+        for (int i = 1; i < all.Length; i++)
         {
-            double result = run().Result;
-            if (Math.Abs(result - expected) > 1e-9 * Math.Abs(expected))
+            if (Math.Abs(results[i] - results[0]) > 1e-9 * Math.Abs(results[0]))
             {
-                throw new InvalidOperationException($"{work}: {name} comes to {result}, the tool to {expected}");
+                throw new InvalidOperationException($"{work}: {all[i].Name} comes to {results[i]}, not {results[0]}");
             }
         }
 
-        var own = new List<double>();
-        List<double>[] others = [.. baselines.Select(_ => new List<double>())];
+        List<double>[] times = [.. all.Select(_ => new List<double>())];
         for (int round = 0; round < rounds; round++)
         {
-            own.Add(tool().Milliseconds);
-            for (int i = 0; i < baselines.Length; i++)
+            for (int i = 0; i < all.Length; i++)
             {
-                others[i].Add(baselines[i].Run().Milliseconds);
+                times[i].Add(all[i].Run().Milliseconds);
             }
         }
 
-        double median = Median(own);
-        for (int i = 0; i < baselines.Length; i++)
+        for (int i = 0; i < tools.Length; i++)
         {
-            double other = Median(others[i]);
-            Console.Out.Write(
-                string.Create(
-                    CultureInfo.InvariantCulture,
-                    $"| {work} | {baselines[i].Name} | {other:F0} ms | {median:F1} ms | {median / other:G2} × | {other / median:F1} × |\n"
-                )
-            );
+            for (int j = tools.Length; j < all.Length; j++)
+            {
+                Print(work, all[i].Name, Median(times[i]), all[j].Name, Median(times[j]));
+            }
         }
     }
+
+    private static void Print(string work, string tool, double toolTime, string baseline, double baselineTime) =>
+        Console.Out.Write(
+            string.Create(
+                CultureInfo.InvariantCulture,
+                $"| {work} | {baseline} | {baselineTime:F1} ms | {tool} | {toolTime:F1} ms | {toolTime / baselineTime:F3} | {baselineTime / toolTime:F1} |\n"
+            )
+        );
 
     public static double Median(List<double> values)
     {

@@ -5,7 +5,7 @@ set -eu
 cd "$(dirname "$0")"
 baselines="$PWD/.baselines"
 mkdir -p "$baselines"
-python3 -c 'import scipy' 2>/dev/null && command -v geos-config cc >/dev/null ||
+/usr/bin/python3 -c 'import scipy' 2>/dev/null && command -v geos-config >/dev/null && command -v cc >/dev/null ||
     apt-get install -y --no-install-recommends python3-scipy libgeos-dev gcc libc6-dev >/dev/null
 [ -d "$baselines/node_modules/delaunator" ] ||
     npm install --silent --no-audit --no-fund --prefix "$baselines" delaunator@5.1.0

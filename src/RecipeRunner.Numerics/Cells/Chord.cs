@@ -27,16 +27,16 @@ internal readonly struct Chord
 
     public double ExitAt { get; }
 
-    /// <summary>The side of the frame where the line comes in: 0 lower, 1 right, 2 upper, 3 left.</summary>
-    public int EntrySide { get; }
-
-    public int ExitSide { get; }
-
     public bool IsEmpty => !(EntryAt < ExitAt);
 
     public (double X, double Y) Entry => PointOn(EntryAt, EntrySide);
 
     public (double X, double Y) Exit => PointOn(ExitAt, ExitSide);
+
+    /// <summary>The side of the frame where the line comes in: 0 lower, 1 right, 2 upper, 3 left.</summary>
+    private int EntrySide { get; }
+
+    private int ExitSide { get; }
 
     /// <summary>Where on the line a point beside it is.</summary>
     public double PlaceOf(double x, double y) => ((y - wall.MidY) * wall.NormalX) - ((x - wall.MidX) * wall.NormalY);

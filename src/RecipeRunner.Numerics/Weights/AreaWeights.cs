@@ -7,9 +7,11 @@ namespace RecipeRunner.Numerics.Weights;
 /// bits for any order of the sites and any number of threads.
 /// </summary>
 /// <remarks>
-/// The weights of a polygon sum to 1 within 1e-12, its areas to its own within 1e-9 relative, or it is refused. A piece no
-/// larger than 2⁻⁴⁷ of the magnitudes it was added up from cannot be told from rounding and is not reported; for a basin
-/// of the size of a cell that is a weight of about 1e-14.
+/// The weights of a polygon sum to 1 within 1e-12, its areas to its own within 1e-9 relative, or it is refused; that may
+/// happen to one thinner than a ten-millionth of its length. A wall is where it should be within a few roundings of the
+/// distance to its two sites, so a weight is off by about 1e-16 times the ratio of that distance to the polygon's width.
+/// A piece below 2⁻⁴⁹ of its outline times the size of its coordinates, relative to the ring's first point, cannot be told
+/// from rounding and is not reported: a weight of about 1e-14 for a basin of the size of a cell.
 /// </remarks>
 public sealed class AreaWeights
 {
@@ -71,18 +73,25 @@ public sealed class AreaWeights
         ArgumentOutOfRangeException.ThrowIfLessThan(threads, 1);
         const int ChunkSize = 64;
         var chunks = new WeightRows[(polygons.Count + ChunkSize - 1) / ChunkSize];
+        int next = -1;
+        int workers = Math.Min(threads, chunks.Length);
         Parallel.For(
             0,
-            chunks.Length,
+            workers,
             new ParallelOptions { MaxDegreeOfParallelism = threads },
-            () => new PolygonWeigher(cells.Graph, polygons),
-            (chunk, _, weigher) =>
+            _ =>
             {
-                int first = chunk * ChunkSize;
-                chunks[chunk] = weigher.Weigh(first, Math.Min(first + ChunkSize, polygons.Count));
-                return weigher;
-            },
-            _ => { }
+                var weigher = new PolygonWeigher(cells.Graph, polygons);
+                for (
+                    int chunk = Interlocked.Increment(ref next);
+                    chunk < chunks.Length;
+                    chunk = Interlocked.Increment(ref next)
+                )
+                {
+                    int first = chunk * ChunkSize;
+                    chunks[chunk] = weigher.Weigh(first, Math.Min(first + ChunkSize, polygons.Count));
+                }
+            }
         );
         List<PolygonRefusal> refusals = [.. chunks.SelectMany(chunk => chunk.Refusals)];
         return refusals.Count == 0

@@ -2,16 +2,18 @@ using RecipeRunner.Numerics.Weights;
 
 namespace RecipeRunner.Numerics.Tests.Support;
 
-/// <summary>Compares weights with golden ones: 1e-9 absolute, areas 1e-9 of the polygon, the same sites above 1e-9.</summary>
+/// <summary>Compares weights with golden ones: weights absolute, areas as a share of the polygon, and the same sites above a weight of 1e-9.</summary>
 internal static class GoldenWeights
 {
-    private const double Tolerance = 1e-9;
+    /// <summary>The goldens leave out what is not above this.</summary>
+    private const double LeastWeight = 1e-9;
 
     public static void ShouldAgree(
         IEnumerable<(string Polygon, string Site, double Area, double Weight)> golden,
         string[] polygons,
         string[] sites,
-        AreaWeights weights
+        AreaWeights weights,
+        double tolerance
     )
     {
         var expected = golden.ToLookup(row => row.Polygon, StringComparer.Ordinal);
@@ -25,13 +27,13 @@ internal static class GoldenWeights
             }
 
             found
-                .Where(row => row.Value.Weight > Tolerance)
+                .Where(row => row.Value.Weight > LeastWeight)
                 .Select(row => row.Key)
                 .ShouldBe(expected[polygons[polygon]].Select(row => row.Site), ignoreOrder: true);
             foreach ((_, string site, double area, double weight) in expected[polygons[polygon]])
             {
-                found[site].Weight.ShouldBe(weight, Tolerance);
-                found[site].Area.ShouldBe(area, Tolerance * weights.PolygonArea(polygon));
+                found[site].Weight.ShouldBe(weight, tolerance);
+                found[site].Area.ShouldBe(area, tolerance * weights.PolygonArea(polygon));
                 worst = Math.Max(worst, Math.Abs(found[site].Weight - weight));
             }
         }

@@ -1,3 +1,4 @@
+using System.Globalization;
 using System.Text.Json;
 using RecipeRunner.Numerics.Tests.Support;
 using RecipeRunner.Numerics.Weights;
@@ -42,7 +43,7 @@ public sealed class HandbookTests
         [
             .. document
                 .RootElement.EnumerateArray()
-                .Where(row => row.GetProperty("kind").GetString() == "thiessen_geometry")
+                .Where(row => row.GetProperty("kind").GetString() is "thiessen_geometry" or "thiessen_geometry_circle")
                 .Select(Example.Of),
         ];
     }
@@ -54,27 +55,63 @@ public sealed class HandbookTests
         return isHole ? [.. ring.Reverse()] : ring;
     }
 
-    private sealed record Example(string Id, double[][][][] Parts, double[][] Gauges, double[] Weights, double Area)
+    private sealed record Example(
+        string Id,
+        double[][][][] Parts,
+        double[][] Gauges,
+        double[] Weights,
+        double Area,
+        double StatedTolerance
+    )
     {
-        /// <summary>Where gauges stand on whole thousandths the lattice holds them; elsewhere it moves them by 1e-8 of the unit.</summary>
-        public double Tolerance => Gauges.All(p => p.All(c => Math.Round(c * 1024) == c * 1024)) ? 1e-12 : 1e-8;
+        /// <summary>The lattice holds gauges on whole 1024ths of the unit; others it moves by 1e-8 of the unit.</summary>
+        public double Tolerance =>
+            Gauges.All(p => p.All(c => Math.Round(c * 1024) == c * 1024)) ? StatedTolerance : 1e-8;
 
         public double Scale => Gauges.Max(p => p.Max(Math.Abs)) > 1e4 ? 1 : 1024;
 
         public static Example Of(JsonElement row)
         {
-            JsonElement inputs = Nested(row, "inputs");
-            JsonElement expected = Nested(row, "expected");
+            JsonElement inputs = row.GetProperty("inputs");
+            JsonElement expected = row.GetProperty("expected");
+            double[][][][] parts = inputs.TryGetProperty("circle", out JsonElement circle)
+                ?
+                [
+                    [PolygonOf(circle)],
+                ]
+                : inputs.GetProperty("basin_parts").Deserialize<double[][][][]>().ShouldNotBeNull();
             return new Example(
                 row.GetProperty("id").GetString().ShouldNotBeNull(),
-                inputs.GetProperty("basin_parts").Deserialize<double[][][][]>().ShouldNotBeNull(),
+                parts,
                 inputs.GetProperty("gauges").Deserialize<double[][]>().ShouldNotBeNull(),
                 expected.GetProperty("weights").Deserialize<double[]>().ShouldNotBeNull(),
-                expected.GetProperty("area").GetDouble()
+                expected.TryGetProperty("area", out JsonElement area) ? area.GetDouble() : AreaOf(circle),
+                double.Parse(
+                    row.GetProperty("tolerance").GetString().ShouldNotBeNull().Split(' ')[0],
+                    CultureInfo.InvariantCulture
+                )
             );
         }
 
-        private static JsonElement Nested(JsonElement row, string name) =>
-            row.TryGetProperty(name, out JsonElement value) ? value : row.GetProperty(name + "_json");
+        private static double[][] PolygonOf(JsonElement circle)
+        {
+            int count = circle.GetProperty("n").GetInt32();
+            double radius = circle.GetProperty("r").GetDouble();
+            (double x, double y) = (circle.GetProperty("cx").GetDouble(), circle.GetProperty("cy").GetDouble());
+            return
+            [
+                .. Enumerable
+                    .Range(0, count)
+                    .Select(k => 2 * Math.PI * k / count)
+                    .Select(angle => (double[])[x + (radius * Math.Cos(angle)), y + (radius * Math.Sin(angle))]),
+            ];
+        }
+
+        private static double AreaOf(JsonElement circle)
+        {
+            int count = circle.GetProperty("n").GetInt32();
+            double radius = circle.GetProperty("r").GetDouble();
+            return count / 2.0 * radius * radius * Math.Sin(2 * Math.PI / count);
+        }
     }
 }

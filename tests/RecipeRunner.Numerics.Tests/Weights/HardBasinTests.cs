@@ -25,6 +25,6 @@ public sealed class HardBasinTests
                     double tolerance = 1e-13 + (1e-14 * basin.ReachIn(network) * basin.Perimeter / basin.Area);
                     WeightsOracle.CheckAgainstClipping(network.X, network.Y, basin.Rings, weights, 0, tolerance);
                 },
-                iter: 10_000
+                iter: 6000
             );
 }

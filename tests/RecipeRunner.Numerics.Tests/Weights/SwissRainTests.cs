@@ -29,7 +29,8 @@ public sealed class SwissRainTests
             Reference.Rows(golden).Select(row => (row["zone"], row["id"], row.Number("area_m2"), row.Number("weight"))),
             names,
             [.. stations.Select(row => row["id"])],
-            weights
+            weights,
+            1e-14
         );
     }
 

@@ -1,4 +1,3 @@
-using System.Numerics;
 using RecipeRunner.Numerics.Triangulation;
 
 namespace RecipeRunner.Testing.Oracles;
@@ -60,7 +59,7 @@ public static class TriangulationOracle
         for (int i = 1; i < line.Length; i++)
         {
             OracleException.Unless(
-                plane.Compare(line[i - 1], line[i]) < 0 && plane.TwiceArea(line[0], line[^1], line[i]).IsZero,
+                plane.Compare(line[i - 1], line[i]) < 0 && plane.TwiceArea(line[0], line[^1], line[i]) == 0,
                 $"Sites {line[i - 1]} and {line[i]} are out of line or out of order."
             );
         }
@@ -73,10 +72,8 @@ public static class TriangulationOracle
             corners.Length / 3 == expected,
             $"{corners.Length / 3} triangles; {sites} sites, {hull.Length} of them on the hull, make {expected}."
         );
-        OracleException.Unless(
-            corners.Distinct().Count() == sites,
-            $"Only {corners.Distinct().Count()} of {sites} sites are corners."
-        );
+        int used = corners.Distinct().Count();
+        OracleException.Unless(used == sites, $"Only {used} of {sites} sites are corners.");
     }
 
     private static void CheckTwins(int[] corners, int[] twins)
@@ -114,7 +111,7 @@ public static class TriangulationOracle
                 next.TryGetValue(a, out int follows) && follows == b,
                 $"After site {a} the hull names site {b}, the triangles site {follows}."
             );
-            OracleException.Unless(plane.TwiceArea(a, b, c).Sign >= 0, $"The hull turns inward at site {b}.");
+            OracleException.Unless(plane.TwiceArea(a, b, c) >= 0, $"The hull turns inward at site {b}.");
             OracleException.Unless(
                 i == 0 || plane.Compare(hull[0], a) < 0,
                 $"The hull does not begin with its first site by x, then y, but site {a} comes before."
@@ -132,15 +129,15 @@ public static class TriangulationOracle
 
     private static void CheckArea(ExactPlane plane, int[] corners, int[] hull)
     {
-        BigInteger ofTriangles = 0;
+        Int128 ofTriangles = 0;
         for (int edge = 0; edge < corners.Length; edge += 3)
         {
-            BigInteger area = plane.TwiceArea(corners[edge], corners[edge + 1], corners[edge + 2]);
-            OracleException.Unless(area.Sign > 0, $"Triangle {edge / 3} does not turn counter-clockwise.");
+            Int128 area = plane.TwiceArea(corners[edge], corners[edge + 1], corners[edge + 2]);
+            OracleException.Unless(area > 0, $"Triangle {edge / 3} does not turn counter-clockwise.");
             ofTriangles += area;
         }
 
-        BigInteger ofHull = 0;
+        Int128 ofHull = 0;
         for (int i = 2; i < hull.Length; i++)
         {
             ofHull += plane.TwiceArea(hull[0], hull[i - 1], hull[i]);
