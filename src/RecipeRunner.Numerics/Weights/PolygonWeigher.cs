@@ -1,5 +1,6 @@
 using System.Runtime.InteropServices;
 using RecipeRunner.Numerics.Cells;
+using RecipeRunner.Numerics.Statistics;
 
 namespace RecipeRunner.Numerics.Weights;
 

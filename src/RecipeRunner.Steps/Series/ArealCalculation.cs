@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Weights;
+using RecipeRunner.Numerics.Statistics;
 using RecipeRunner.Steps.Weighting;
 
 namespace RecipeRunner.Steps.Series;
@@ -72,7 +73,7 @@ internal sealed class ArealCalculation
 
     private static (int Count, double Share) Reporting(ImmutableArray<Weight> weights, ReadOnlySpan<bool> reports)
     {
-        var (count, share) = (0, default(SteadySum));
+        var (count, share) = (0, default(CompensatedSum));
         foreach (var weight in weights)
         {
             if (reports[weight.Gauge])
@@ -87,7 +88,7 @@ internal sealed class ArealCalculation
 
     private static double Sum(ImmutableArray<Weight> weights, ReadOnlySpan<double> depths)
     {
-        var sum = default(SteadySum);
+        var sum = default(CompensatedSum);
         foreach (var weight in weights)
         {
             sum.Add(weight.Share * depths[weight.Gauge]);
@@ -102,7 +103,7 @@ internal sealed class ArealCalculation
         ReadOnlySpan<bool> reports
     )
     {
-        var (sum, share) = (default(SteadySum), default(SteadySum));
+        var (sum, share) = (default(CompensatedSum), default(CompensatedSum));
         foreach (var weight in weights)
         {
             if (reports[weight.Gauge])

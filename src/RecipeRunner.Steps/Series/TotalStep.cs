@@ -4,6 +4,7 @@ using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
 using RecipeRunner.Model.Wording;
+using RecipeRunner.Numerics.Statistics;
 
 namespace RecipeRunner.Steps.Series;
 
@@ -67,7 +68,7 @@ public sealed record TotalStep(ArealRainfall Areal, Every Period, AtLeast Comple
 
     private ArealTotal TotalOf(int basin, IEnumerable<int> steps, int expected)
     {
-        var sum = default(SteadySum);
+        var sum = default(CompensatedSum);
         var present = 0;
         foreach (var depth in steps.Select(t => Areal.At(t, basin).DepthMillimetres).OfType<double>())
         {

@@ -1,5 +1,6 @@
 using RecipeRunner.Numerics.Tests.Support;
 using RecipeRunner.Numerics.Weights;
+using RecipeRunner.Testing;
 
 namespace RecipeRunner.Numerics.Tests.Weights;
 
@@ -23,12 +24,12 @@ public sealed class CarolinaTests
     [InlineData("5070", "noshift", 32, 1e-10)]
     public void County_weights_agree(string crs, string datum, double scale, double tolerance)
     {
-        List<Dictionary<string, string>> gauges = Reference.Rows("nc1948/gauges_projected.csv");
+        List<Dictionary<string, string>> gauges = ReferenceTable.Rows("nc1948/gauges_projected.csv");
         Network network = Network.Of([
             .. gauges.Select(row => (scale * row.Number($"x_{crs}"), scale * row.Number($"y_{crs}"))),
         ]);
         network.Count.ShouldBe(gauges.Count);
-        var counties = Reference
+        var counties = ReferenceTable
             .Rows("nc1948/counties_vertices.csv")
             .GroupBy(row => row["fips"], StringComparer.Ordinal)
             .Select(county => (Fips: county.Key, Rings: RingsOf(county, $"x_{crs}_{datum}", $"y_{crs}_{datum}", scale)))
@@ -36,7 +37,7 @@ public sealed class CarolinaTests
         counties.Count.ShouldBe(100);
         var weights = AreaWeights.Of(network.Cells(), Shapes.Batch([.. counties.Select(county => county.Rings)]), 2);
         GoldenWeights.ShouldAgree(
-            Reference
+            ReferenceTable
                 .Rows("nc1948/thiessen_weights.csv")
                 .Where(row => row["crs"] == crs && row["datum_variant"] == datum)
                 .Select(row =>

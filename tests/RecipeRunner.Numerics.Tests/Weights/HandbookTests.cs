@@ -2,6 +2,7 @@ using System.Globalization;
 using System.Text.Json;
 using RecipeRunner.Numerics.Tests.Support;
 using RecipeRunner.Numerics.Weights;
+using RecipeRunner.Testing;
 
 namespace RecipeRunner.Numerics.Tests.Weights;
 
@@ -38,7 +39,9 @@ public sealed class HandbookTests
 
     private static List<Example> Load()
     {
-        using var document = JsonDocument.Parse(File.ReadAllText(Reference.PathOf("handbook/worked_examples.json")));
+        using var document = JsonDocument.Parse(
+            File.ReadAllText(ReferenceFolder.PathOf("handbook/worked_examples.json"))
+        );
         return
         [
             .. document

@@ -2,6 +2,7 @@ using RecipeRunner.Numerics.Cells;
 using RecipeRunner.Numerics.Tests.Support;
 using RecipeRunner.Numerics.Triangulation;
 using RecipeRunner.Numerics.Weights;
+using RecipeRunner.Testing;
 
 namespace RecipeRunner.Numerics.Tests.Weights;
 
@@ -11,7 +12,7 @@ namespace RecipeRunner.Numerics.Tests.Weights;
 /// </summary>
 public sealed class SwissRainTests
 {
-    private readonly List<Dictionary<string, string>> stations = Reference.Rows("sic97/stations.csv");
+    private readonly List<Dictionary<string, string>> stations = ReferenceTable.Rows("sic97/stations.csv");
 
     private DelaunayTriangulation Triangulation =>
         DelaunayTriangulation.Of(
@@ -26,7 +27,9 @@ public sealed class SwissRainTests
     {
         (string[] names, AreaWeights weights) = WeighZones();
         GoldenWeights.ShouldAgree(
-            Reference.Rows(golden).Select(row => (row["zone"], row["id"], row.Number("area_m2"), row.Number("weight"))),
+            ReferenceTable
+                .Rows(golden)
+                .Select(row => (row["zone"], row["id"], row.Number("area_m2"), row.Number("weight"))),
             names,
             [.. stations.Select(row => row["id"])],
             weights,
@@ -39,7 +42,7 @@ public sealed class SwissRainTests
     {
         (string[] names, AreaWeights weights) = WeighZones();
         double[] rain = [.. stations.Select(row => row.Number("rain_mm"))];
-        foreach (Dictionary<string, string> row in Reference.Rows("sic97/areal_means.csv"))
+        foreach (Dictionary<string, string> row in ReferenceTable.Rows("sic97/areal_means.csv"))
         {
             int zone = Array.IndexOf(names, row["zone"]);
             double mean = 0;
@@ -55,10 +58,10 @@ public sealed class SwissRainTests
 
     private (string[] Names, AreaWeights Weights) WeighZones()
     {
-        List<Dictionary<string, string>> boxes = Reference.Rows("sic97/boxes.csv");
+        List<Dictionary<string, string>> boxes = ReferenceTable.Rows("sic97/boxes.csv");
         (double X, double Y)[] hull =
         [
-            .. Reference.Rows("sic97/hull.csv").Select(row => (row.Number("x_m"), row.Number("y_m"))),
+            .. ReferenceTable.Rows("sic97/hull.csv").Select(row => (row.Number("x_m"), row.Number("y_m"))),
         ];
         (double X, double Y)[][][] zones =
         [
@@ -76,7 +79,7 @@ public sealed class SwissRainTests
     [Fact]
     public void Triangles_and_hull_are_as_many_as_Qhull_found()
     {
-        Dictionary<string, double> golden = Reference
+        Dictionary<string, double> golden = ReferenceTable
             .Rows("sic97/delaunay.csv")
             .ToDictionary(row => row["quantity"], row => row.Number("value"), StringComparer.Ordinal);
         DelaunayTriangulation triangulation = Triangulation;
@@ -86,7 +89,7 @@ public sealed class SwissRainTests
         ((triangulation.Corners.Length + onHull) / 2).ShouldBe((int)golden["delaunay_edges"]);
         onHull.ShouldBe((int)golden["hull_vertices"]);
         string[] hull = [.. triangulation.Hull.ToArray().Select(site => stations[site]["id"])];
-        string[] expected = [.. Reference.Rows("sic97/hull.csv").Select(row => row["id"])];
+        string[] expected = [.. ReferenceTable.Rows("sic97/hull.csv").Select(row => row["id"])];
         int turn = Array.IndexOf(expected, hull[0]);
         hull.ShouldBe([.. expected[turn..], .. expected[..turn]]);
     }

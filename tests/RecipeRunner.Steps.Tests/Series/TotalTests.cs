@@ -1,6 +1,7 @@
 using NodaTime;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Time;
+using RecipeRunner.Numerics.Statistics;
 using RecipeRunner.Steps.Series;
 using RecipeRunner.Steps.Tests.Support;
 using RecipeRunner.Steps.Weighting;
@@ -57,8 +58,8 @@ public sealed class TotalTests : IDisposable
     [Fact]
     public void Sums_keep_the_digits_that_plain_addition_drops()
     {
-        // source: Neumaier 1974; in exact arithmetic the sum is 2, plain addition of doubles gives 0.
-        var sum = new SteadySum();
+        // source: Neumaier 1974, doi:10.1002/zamm.19740540106; in exact arithmetic the sum is 2, plain addition of doubles gives 0.
+        var sum = new CompensatedSum();
         foreach (var value in (double[])[1, 1e100, 1, -1e100])
         {
             sum.Add(value);
