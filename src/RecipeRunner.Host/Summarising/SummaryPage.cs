@@ -29,7 +29,8 @@ internal static class SummaryPage
             MapSection(page, weights, record);
         }
 
-        foreach (var entry in record.Journal.DistinctBy(entry => entry.Output.Digest, StringComparer.Ordinal))
+        var results = record.Journal.DistinctBy(entry => entry.Output.Digest, StringComparer.Ordinal);
+        foreach (var entry in results.OrderBy(entry => entry.Output is WeightTable))
         {
             ResultSection(page, entry);
         }

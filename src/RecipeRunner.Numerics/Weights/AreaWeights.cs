@@ -7,11 +7,9 @@ namespace RecipeRunner.Numerics.Weights;
 /// bits for any order of the sites and any number of threads.
 /// </summary>
 /// <remarks>
-/// The weights of a polygon sum to 1 within 1e-12, its areas to its own within 1e-9 relative, or it is refused; that may
-/// happen to one thinner than a ten-millionth of its length. A wall is where it should be within a few roundings of the
-/// distance to its two sites, so a weight is off by about 1e-16 times the ratio of that distance to the polygon's width.
-/// A piece below 2⁻⁴⁹ of its outline times the size of its coordinates, relative to the ring's first point, cannot be told
-/// from rounding and is not reported: a weight of about 1e-14 for a basin of the size of a cell.
+/// The weights of a polygon sum to 1 within 1e-12, its areas to its own within 1e-9 relative, or it is refused. A piece no
+/// larger than 2⁻⁴⁹ of the magnitudes it was added up from, or 1e-15 of the polygon, cannot be told from rounding and is not
+/// reported.
 /// </remarks>
 public sealed class AreaWeights
 {

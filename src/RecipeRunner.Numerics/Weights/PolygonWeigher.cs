@@ -10,6 +10,15 @@ internal sealed class PolygonWeigher(CellGraph graph, PolygonBatch polygons)
     /// <summary>Pieces below this part of the magnitudes they were added up from are rounding: 16 roundings.</summary>
     private const double RoundingPart = 1.0 / (1L << 49);
 
+    /// <summary>
+    /// Pieces below this part of the polygon are rounding too: along a boundary that runs on a wall, pieces of up to 2e-16 of
+    /// it were seen on either side of zero.
+    /// </summary>
+    private const double LeastPart = 1e-15;
+
+    /// <summary>A negative piece below this part of the polygon changes no weight that anyone is promised.</summary>
+    private const double HarmlessPart = 1e-12;
+
     /// <summary>How far, relative, the pieces may be from the whole.</summary>
     private const double AreaTolerance = 1e-9;
 
@@ -55,8 +64,8 @@ internal sealed class PolygonWeigher(CellGraph graph, PolygonBatch polygons)
         var sum = new CompensatedSum();
         foreach (Piece piece in pieces)
         {
-            double bound = piece.Magnitude * RoundingPart;
-            if (piece.TwiceArea < -bound)
+            double bound = Math.Max(piece.Magnitude * RoundingPart, LeastPart * area);
+            if (piece.TwiceArea < -Math.Max(bound, HarmlessPart * area))
             {
                 return "has rings that cross, overlap or run the wrong way";
             }

@@ -6,7 +6,7 @@ namespace RecipeRunner.Steps.Series;
 /// <summary>Lays out how many of the steps that a period has by the calendar each total rests on.</summary>
 /// <param name="Totals">Totals of areal rainfall.</param>
 /// <example><code>EmitTable(areal.Total(Every.Month).Completeness(), "months-completeness");</code></example>
-[Step("Completeness")]
+[Step("Completeness", Word = "complete")]
 public sealed record CompletenessStep(ArealTotals Totals) : Step<CompletenessTable>
 {
     /// <inheritdoc/>

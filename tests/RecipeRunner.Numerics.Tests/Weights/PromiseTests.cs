@@ -28,6 +28,16 @@ public sealed class PromiseTests
                 iter: 100
             );
 
+    /// <summary>A cell's outline weighed as a basin, whose rounding once looked like rings that cross.</summary>
+    [Fact]
+    public void Rounding_along_walls_is_no_crossing() =>
+        Gen.Select(Network.Any, Gen.Int[0, int.MaxValue])
+            .Sample(
+                (network, seed) => AreaWeights.Of(network.Cells(), Many(network, seed), 1).Count.ShouldBePositive(),
+                seed: "4Q1JNHhOSxU2",
+                iter: 200
+            );
+
     [Fact]
     public void Basins_that_tile_a_region_have_pieces_that_tile_it() =>
         Gen.Select(Network.Any, Gen.Int[2, 12], Gen.Int[0, int.MaxValue])
