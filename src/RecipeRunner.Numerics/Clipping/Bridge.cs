@@ -11,10 +11,15 @@ internal static class Bridge
     /// <summary>What rounding may do to the distance of a wall, as a share of the coordinates it is computed from.</summary>
     private const double RoundingPart = 1.0 / (1L << 44);
 
+    /// <summary>What the digits of the ring's own coordinates leave open, as a share of them: four of their last bits.</summary>
+    private const double DigitsPart = 1.0 / (1L << 50);
+
     /// <summary>The walls to cross, in order, to come from one site's cell to another's; null if none pass the point.</summary>
     public static IReadOnlyList<int>? Between(CellGraph graph, int from, int to, double x, double y)
     {
-        double tolerance = RoundingPart * Math.Max(FarthestWall(graph, from, x, y), FarthestWall(graph, to, x, y));
+        double tolerance =
+            (RoundingPart * Math.Max(FarthestWall(graph, from, x, y), FarthestWall(graph, to, x, y)))
+            + (DigitsPart * (Math.Abs(x) + Math.Abs(y)));
         var cameBy = new Dictionary<int, int> { [from] = -1 };
         var reached = new List<int> { from };
         for (int next = 0; next < reached.Count && !cameBy.ContainsKey(to); next++)

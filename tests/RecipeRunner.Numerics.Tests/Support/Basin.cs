@@ -34,8 +34,16 @@ internal sealed class Basin
 
     public double Area => Rings.Sum(SignedArea);
 
-    /// <summary>Thinner than AreaWeights promises to weigh.</summary>
-    public bool IsTooThin => Area < 1e-7 * Perimeter * Perimeter;
+    /// <summary>Thinner than AreaWeights promises to weigh, or than the digits of its coordinates can tell to 1e-10 of its area.</summary>
+    public bool IsTooThin => Area < 1e-7 * Perimeter * Perimeter || LastDigit * Perimeter > 1e-10 * Area;
+
+    private double LastDigit =>
+        Rings
+            .SelectMany(ring => ring)
+            .Select(p =>
+                Math.BitIncrement(Math.Max(Math.Abs(p.X), Math.Abs(p.Y))) - Math.Max(Math.Abs(p.X), Math.Abs(p.Y))
+            )
+            .Max();
 
     public PolygonBatch Batch => Shapes.Batch([.. Rings]);
 
