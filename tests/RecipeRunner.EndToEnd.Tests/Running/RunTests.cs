@@ -168,7 +168,7 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
             "--data",
             DemoStudy.Data,
             "--into",
-            "/proc/nowhere/x.study"
+            "/proc/x.study"
         );
 
         said.ExitCode.ShouldBe(1);
