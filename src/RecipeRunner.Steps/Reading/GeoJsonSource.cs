@@ -16,6 +16,8 @@ namespace RecipeRunner.Steps.Reading;
 /// </summary>
 internal static class GeoJsonSource
 {
+    private const string OwnId = "id";
+
     private static readonly JsonSerializerOptions Options = new()
     {
         Converters = { new GeoJsonConverterFactory(RegionGeometry.Factory) },
@@ -83,8 +85,13 @@ internal static class GeoJsonSource
                 .Select(feature => feature.TryGetProperty("properties", out var properties) ? properties : default)
                 .Where(properties => properties.ValueKind == JsonValueKind.Object)
                 .SelectMany(properties => properties.EnumerateObject().Select(property => property.Name))
+                .Concat(features.EnumerateArray().Any(HasOwnId) ? [OwnId] : [])
                 .Distinct(StringComparer.Ordinal),
         ];
+
+    /// <summary>RFC 7946, section 3.2: a feature's identifier stands beside its properties. It serves as a column where those have none of its name.</summary>
+    private static bool HasOwnId(JsonElement feature) =>
+        feature.ValueKind == JsonValueKind.Object && feature.TryGetProperty(OwnId, out _);
 
     private static FileFeature FeatureOf(
         JsonElement feature,
@@ -108,7 +115,7 @@ internal static class GeoJsonSource
         return new FileFeature(
             number,
             GeometryOf(feature, place, problems),
-            [.. fields.Select(field => TextOf(properties, field))]
+            [.. fields.Select(field => TextOf(field == OwnId && !Has(properties, field) ? feature : properties, field))]
         );
     }
 
@@ -136,13 +143,17 @@ internal static class GeoJsonSource
         }
     }
 
+    private static bool Has(JsonElement element, string name) =>
+        element.ValueKind == JsonValueKind.Object && element.TryGetProperty(name, out _);
+
     private static string TextOf(JsonElement properties, string field)
     {
-        if (properties.ValueKind != JsonValueKind.Object || !properties.TryGetProperty(field, out var value))
+        if (!Has(properties, field))
         {
             return "";
         }
 
+        var value = properties.GetProperty(field);
         return value.ValueKind switch
         {
             JsonValueKind.Null => "",

@@ -162,14 +162,7 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
     public void A_place_that_cannot_be_written_is_told_without_a_stack_trace()
     {
         using var tool = new Tool();
-        var said = tool.Run(
-            "run",
-            DemoStudy.Recipe("one-storm"),
-            "--data",
-            DemoStudy.Data,
-            "--into",
-            "/proc/x.study"
-        );
+        var said = tool.Run("run", DemoStudy.Recipe("one-storm"), "--data", DemoStudy.Data, "--into", "/proc/x.study");
 
         said.ExitCode.ShouldBe(1);
         said.Errors.ShouldStartWith("error RR0704: ");

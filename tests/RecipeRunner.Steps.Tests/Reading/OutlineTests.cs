@@ -94,6 +94,18 @@ public sealed class OutlineTests : IDisposable
     }
 
     [Fact]
+    public void A_features_own_identifier_serves_where_its_properties_have_none()
+    {
+        const string Square = "{\"type\":\"Polygon\",\"coordinates\":[[[13,50],[14,50],[14,51],[13,51],[13,50]]]}";
+        bench.Write(
+            "basins.geojson",
+            $"{{\"type\":\"FeatureCollection\",\"features\":[{{\"type\":\"Feature\",\"id\":42,\"properties\":null,\"geometry\":{Square}}}]}}"
+        );
+
+        bench.Verbs.ReadBasins("basins.geojson", id: "id").Basins[0].Id.ShouldBe("42");
+    }
+
+    [Fact]
     public void Metres_under_a_name_of_degrees_are_refused()
     {
         bench.Write(
