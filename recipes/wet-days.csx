@@ -21,7 +21,7 @@ foreach (var gaps in new[] { GapPolicy.Redraw, GapPolicy.Rescale, GapPolicy.With
     var areal = weights.MeanRain(rain, gaps, reporting: AtLeast.Percent(60));
     for (var b = 0; b < basins.Basins.Length; b++)
     {
-        var given = Enumerable.Range(0, areal.Labels.Length).Select(day => areal.At(day, b).DepthMillimetres).OfType<double>().ToList();
+        var given = Enumerable.Range(0, areal.Times.Count).Select(day => areal.At(day, b).DepthMillimetres).OfType<double>().ToList();
         var wet = given.Count(depth => depth >= wetFrom);
         Note($"{basins.Basins[b].Name}: {wet} of {given.Count} days with a value had {wetFrom} mm or more ({gaps}).");
     }

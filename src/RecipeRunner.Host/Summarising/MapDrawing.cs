@@ -141,12 +141,12 @@ internal static class MapDrawing
     private static IEnumerable<string> ReportingGauges(RainRecords records)
     {
         var reports = new bool[records.GaugeIds.Length];
-        for (var t = 0; t < records.Labels.Length; t++)
+        for (var t = 0; t < records.Times.Count; t++)
         {
             var statuses = records.StatusesAt(t);
             for (var gauge = 0; gauge < reports.Length; gauge++)
             {
-                reports[gauge] |= statuses[gauge] != RecordStatus.Missing;
+                reports[gauge] |= statuses[gauge].Reports();
             }
         }
 

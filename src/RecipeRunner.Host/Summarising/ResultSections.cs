@@ -43,7 +43,7 @@ internal static class ResultSections
         page.Element("h2", "Basins");
         var basins = areal.Basins.Basins;
         page.Table(
-            $"Mean areal rainfall, {areal.Labels.Length.ToString("N0", CultureInfo.InvariantCulture)} {areal.Step.ToSettingText()} from {areal.Step.LabelText(areal.Labels[0])} to {areal.Step.LabelText(areal.Labels[^1])}",
+            $"Mean areal rainfall, {areal.Times.Count.ToString("N0", CultureInfo.InvariantCulture)} {areal.Times.Step.ToSettingText()} from {areal.Times}",
             [
                 "basin",
                 "name",
@@ -74,7 +74,7 @@ internal static class ResultSections
 
     private static string[] BasinRow(ArealRainfall areal, int b)
     {
-        var values = Enumerable.Range(0, areal.Labels.Length).Select(t => areal.At(t, b)).ToArray();
+        var values = Enumerable.Range(0, areal.Times.Count).Select(t => areal.At(t, b)).ToArray();
         var withheld = values.Count(value => value.Status == ArealStatus.Withheld);
         return
         [

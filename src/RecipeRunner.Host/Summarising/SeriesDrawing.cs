@@ -17,9 +17,9 @@ internal static class SeriesDrawing
     /// <summary>The drawing of one basin.</summary>
     public static string Of(ArealRainfall areal, int basin)
     {
-        var together = (areal.Labels.Length + MostBars - 1) / MostBars;
+        var together = (areal.Times.Count + MostBars - 1) / MostBars;
         var bars = Enumerable
-            .Range(0, (areal.Labels.Length + together - 1) / together)
+            .Range(0, (areal.Times.Count + together - 1) / together)
             .Select(i => Bar.Of(areal, basin, i * together, together))
             .ToArray();
         var most = Math.Max(0.1, bars.Max(bar => bar.Depth));
@@ -38,8 +38,8 @@ internal static class SeriesDrawing
         svg.Append(CultureInfo.InvariantCulture, $"<path class=\"axis\" d=\"M0 {BarsTop + BarsHeight}H{Width}\"/>");
         var sums = together == 1 ? "" : string.Create(CultureInfo.InvariantCulture, $", sums of {together} steps");
         svg.Append(Label(0, 10, $"up to {Html.Number(most, "0.0")} mm{sums}", "start"));
-        svg.Append(Label(0, 114, areal.Step.LabelText(areal.Labels[0]), "start"));
-        svg.Append(Label(Width, 114, areal.Step.LabelText(areal.Labels[^1]), "end"));
+        svg.Append(Label(0, 114, areal.Times.TextAt(0), "start"));
+        svg.Append(Label(Width, 114, areal.Times.TextAt(areal.Times.Count - 1), "end"));
         return svg.Append("</svg>").ToString();
     }
 
@@ -68,7 +68,7 @@ internal static class SeriesDrawing
         public static Bar Of(ArealRainfall areal, int basin, int first, int count)
         {
             var values = Enumerable
-                .Range(first, Math.Min(count, areal.Labels.Length - first))
+                .Range(first, Math.Min(count, areal.Times.Count - first))
                 .Select(t => areal.At(t, basin))
                 .ToArray();
             return new Bar(

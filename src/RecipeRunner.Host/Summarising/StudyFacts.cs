@@ -30,7 +30,7 @@ public static class StudyFacts
                 "time",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{series.Max(areal => areal.Labels.Length):N0} {series[0].Step.ToSettingText()}{(series.Length > 1 ? $", {series.Length} series" : "")}"
+                    $"{series.Max(areal => areal.Times.Count):N0} {series[0].Times.Step.ToSettingText()}{(series.Length > 1 ? $", {series.Length} series" : "")}"
                 )
             );
             yield return (

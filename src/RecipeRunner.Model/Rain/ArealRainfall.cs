@@ -1,38 +1,9 @@
-using System.Collections.Immutable;
 using System.Globalization;
-using NodaTime;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
 
 namespace RecipeRunner.Model.Rain;
-
-/// <summary>Whether an areal value was given.</summary>
-public enum ArealStatus : byte
-{
-    /// <summary>Every gauge with weight in the full network reported.</summary>
-    Complete,
-
-    /// <summary>Some were missing; the value follows from those that reported.</summary>
-    Partial,
-
-    /// <summary>No value: too little reported.</summary>
-    Withheld,
-}
-
-/// <summary>Mean areal rainfall of one basin over one step, with what it rests on.</summary>
-/// <param name="DepthMillimetres">The depth; null where withheld, which is not zero.</param>
-/// <param name="Status">Whether the value was given.</param>
-/// <param name="GaugesReporting">Gauges of the full network's weights that reported.</param>
-/// <param name="WeightReporting">The share of the basin's weight in the full network that reported, 0 to 1.</param>
-/// <param name="NearestReportingMetres">Distance from the basin (0 inside) to the nearest reporting gauge; null where none reported.</param>
-public readonly record struct ArealValue(
-    double? DepthMillimetres,
-    ArealStatus Status,
-    int GaugesReporting,
-    double WeightReporting,
-    double? NearestReportingMetres
-);
 
 /// <summary>Mean areal rainfall of basins through time.</summary>
 public sealed class ArealRainfall : Artifact, ITabular
@@ -41,20 +12,18 @@ public sealed class ArealRainfall : Artifact, ITabular
 
     /// <summary>Creates the series.</summary>
     /// <param name="basins">The basins, a column each.</param>
-    /// <param name="step">The steps of time.</param>
-    /// <param name="labels">The labels of the steps.</param>
+    /// <param name="times">The steps of time.</param>
     /// <param name="values">Values, step after step, one a basin.</param>
     /// <exception cref="ArgumentException">The number of values is not steps times basins.</exception>
-    public ArealRainfall(BasinLayer basins, TimeStep step, ImmutableArray<LocalDate> labels, ArealValue[] values)
+    public ArealRainfall(BasinLayer basins, Timeline times, ArealValue[] values)
     {
-        if (values.Length != basins.Basins.Length * labels.Length)
+        if (values.Length != basins.Basins.Length * times.Count)
         {
             throw new ArgumentException("A value is needed for every basin at every step.", nameof(values));
         }
 
         Basins = basins;
-        Step = step;
-        Labels = labels;
+        Times = times;
         this.values = values;
     }
 
@@ -62,10 +31,7 @@ public sealed class ArealRainfall : Artifact, ITabular
     public BasinLayer Basins { get; }
 
     /// <summary>The steps of time.</summary>
-    public TimeStep Step { get; }
-
-    /// <summary>The label of each step.</summary>
-    public ImmutableArray<LocalDate> Labels { get; }
+    public Timeline Times { get; }
 
     /// <summary>The number of values withheld.</summary>
     public int WithheldCount => values.Count(value => value.Status == ArealStatus.Withheld);
@@ -81,7 +47,7 @@ public sealed class ArealRainfall : Artifact, ITabular
     /// <summary>Columns <c>start</c>, <c>end</c> and one a basin with depths in mm, blank where withheld.</summary>
     public Table ToTable()
     {
-        var intervals = Labels.Select(Step.IntervalOf).ToArray();
+        var intervals = Enumerable.Range(0, Times.Count).Select(Times.IntervalAt).ToArray();
         return new Table([
             Column.OfText("start", "Local time after which the rain fell", intervals.Select(i => i.StartText)),
             Column.OfText("end", "Local time up to which the rain fell", intervals.Select(i => i.EndText)),
@@ -93,25 +59,20 @@ public sealed class ArealRainfall : Artifact, ITabular
     public override string Describe() =>
         string.Create(
             CultureInfo.InvariantCulture,
-            $"{Basins.Basins.Length:N0} basins x {Labels.Length:N0} steps, {WithheldCount:N0} withheld"
+            $"{Basins.Basins.Length:N0} basins x {Times.Count:N0} steps, {WithheldCount:N0} withheld"
         );
 
     /// <inheritdoc/>
     protected override void WriteCanonical(CanonicalWriter writer)
     {
         writer.Write(Basins);
-        writer.Write(Step.ToSettingText());
-        writer.Write(Labels.Length);
-        foreach (var label in Labels)
-        {
-            writer.Write(Step.LabelText(label));
-        }
-
+        writer.Write(Times);
         foreach (var value in values)
         {
             writer.Write(value.DepthMillimetres);
             writer.Write((int)value.Status);
             writer.Write(value.GaugesReporting);
+            writer.Write(value.GaugesEstimated);
             writer.Write(value.WeightReporting);
             writer.Write(value.NearestReportingMetres);
         }
@@ -123,7 +84,7 @@ public sealed class ArealRainfall : Artifact, ITabular
             "mm",
             6,
             $"Mean areal rainfall of {basin.Name}; blank where withheld",
-            Enumerable.Range(0, Labels.Length).Select(t => At(t, b).DepthMillimetres)
+            Enumerable.Range(0, Times.Count).Select(t => At(t, b).DepthMillimetres)
         );
 
     /// <summary>The basin's id, told apart from the columns that every such table has.</summary>

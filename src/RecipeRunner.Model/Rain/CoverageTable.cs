@@ -14,17 +14,17 @@ public sealed class CoverageTable : Artifact, ITabular
     /// <summary>The values.</summary>
     public ArealRainfall Areal { get; }
 
-    /// <summary>Columns <c>basin, end, gauges_reporting, weight_reporting, nearest_reporting_km, status</c>.</summary>
+    /// <summary>Columns <c>basin, end, gauges_reporting, gauges_estimated, weight_reporting, nearest_reporting_km, status</c>.</summary>
     public Table ToTable()
     {
         var basins = Areal.Basins.Basins;
         var rows = Enumerable
             .Range(0, basins.Length)
             .SelectMany(b =>
-                Enumerable.Range(0, Areal.Labels.Length).Select(t => (Basin: b, Step: t, Value: Areal.At(t, b)))
+                Enumerable.Range(0, Areal.Times.Count).Select(t => (Basin: b, Step: t, Value: Areal.At(t, b)))
             )
             .ToArray();
-        var ends = Areal.Labels.Select(label => Areal.Step.IntervalOf(label).EndText).ToArray();
+        var ends = Enumerable.Range(0, Areal.Times.Count).Select(t => Areal.Times.IntervalAt(t).EndText).ToArray();
         return new Table([
             Column.OfText("basin", "Basin id", rows.Select(row => basins[row.Basin].Id)),
             Column.OfText("end", "Local time up to which the rain fell", rows.Select(row => ends[row.Step])),
@@ -33,6 +33,12 @@ public sealed class CoverageTable : Artifact, ITabular
                 "",
                 "Gauges with weight in the full network that reported",
                 rows.Select(row => row.Value.GaugesReporting)
+            ),
+            Column.OfCounts(
+                "gauges_estimated",
+                "",
+                "How many of them gave an estimated depth",
+                rows.Select(row => row.Value.GaugesEstimated)
             ),
             Column.OfNumbers(
                 "weight_reporting",

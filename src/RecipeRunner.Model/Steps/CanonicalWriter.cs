@@ -1,7 +1,9 @@
 using System.Buffers.Binary;
+using System.Runtime.InteropServices;
 using System.Security.Cryptography;
 using System.Text;
 using RecipeRunner.Model.Space;
+using RecipeRunner.Model.Time;
 
 namespace RecipeRunner.Model.Steps;
 
@@ -48,6 +50,31 @@ public sealed class CanonicalWriter
         Write(bytes.Length);
         Flush();
         hash.AppendData(bytes);
+    }
+
+    /// <summary>Numbers by their bits, their number first; negative zero as it is.</summary>
+    public void Write(ReadOnlySpan<double> values)
+    {
+        Write(values.Length);
+        if (BitConverter.IsLittleEndian)
+        {
+            Flush();
+            hash.AppendData(MemoryMarshal.AsBytes(values));
+            return;
+        }
+
+        foreach (var value in values)
+        {
+            Write(BitConverter.DoubleToInt64Bits(value));
+        }
+    }
+
+    /// <summary>Steps of time.</summary>
+    public void Write(Timeline times)
+    {
+        Write(times.Step.ToSettingText());
+        Write(times.Step.LabelText(times.First));
+        Write(times.Count);
     }
 
     /// <summary>A place.</summary>

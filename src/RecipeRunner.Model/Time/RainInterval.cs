@@ -17,4 +17,7 @@ public readonly record struct RainInterval(LocalDateTime Start, LocalDateTime En
 
     /// <summary>The end as tables write it.</summary>
     public string EndText => Pattern.Format(End);
+
+    /// <summary>How long it is.</summary>
+    public double Hours => Period.Between(Start, End, PeriodUnits.Minutes).Minutes / 60.0;
 }

@@ -61,14 +61,14 @@ internal static class TablePeek
                 "span",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{step.LabelText(records.Labels[0])} to {step.LabelText(records.Labels[^1])}, {records.Labels.Length:N0} steps, as {step.ToSettingText()}"
+                    $"{records.Times.TextAt(0)} to {records.Times.TextAt(records.Times.Count - 1)}, {records.Times.Count:N0} steps, as {step.ToSettingText()}"
                 )
             ),
             (
                 "missing",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{100.0 * records.MissingCount / Math.Max(1, records.Labels.Length * records.GaugeIds.Length):0.0} % of all values"
+                    $"{100.0 * records.SilentCount / Math.Max(1, records.Times.Count * records.GaugeIds.Length):0.0} % of all values"
                 )
             ),
         ];
@@ -96,12 +96,12 @@ internal static class TablePeek
     private static string Largest(RainRecords records)
     {
         var (step, gauge) = Enumerable
-            .Range(0, records.Labels.Length)
+            .Range(0, records.Times.Count)
             .SelectMany(t => Enumerable.Range(0, records.GaugeIds.Length).Select(g => (t, g)))
             .MaxBy(cell => records.DepthsAt(cell.t)[cell.g]);
         return string.Create(
             CultureInfo.InvariantCulture,
-            $"{records.DepthsAt(step)[gauge]:0.###} at {records.GaugeIds[gauge]} on {records.Step.LabelText(records.Labels[step])}, in the file's unit"
+            $"{records.DepthsAt(step)[gauge]:0.###} at {records.GaugeIds[gauge]} on {records.Times.TextAt(step)}, in the file's unit"
         );
     }
 

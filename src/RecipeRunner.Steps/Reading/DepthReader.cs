@@ -19,9 +19,10 @@ internal sealed class DepthReader(string file, RainUnit unit, ImmutableArray<str
     /// <param name="line">Its line.</param>
     /// <param name="column">Its column, from 1.</param>
     /// <param name="gauge">The gauge.</param>
+    /// <param name="hours">How long the step is.</param>
     /// <param name="problems">Takes what is wrong.</param>
     /// <returns>Millimetres; null where missing or wrong.</returns>
-    public double? Read(ReadOnlySpan<char> cell, int line, int column, string gauge, Problems problems)
+    public double? Read(ReadOnlySpan<char> cell, int line, int column, string gauge, double hours, Problems problems)
     {
         var text = cell.Trim();
         if (text.IsEmpty)
@@ -50,7 +51,7 @@ internal sealed class DepthReader(string file, RainUnit unit, ImmutableArray<str
             return null;
         }
 
-        return unit.ToMillimetres(depth + 0.0);
+        return unit.ToMillimetres(depth + 0.0, hours);
     }
 
     private bool IsMissingNumber(double depth)

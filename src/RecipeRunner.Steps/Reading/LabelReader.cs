@@ -21,8 +21,6 @@ internal sealed class LabelReader(string file, TimeStep step)
         LocalDateTimePattern.CreateWithInvariantCulture("uuuu'-'MM'-'dd' 'HH':'mm':'ss"),
     ];
 
-    private readonly bool months = step == TimeStep.Months;
-
     /// <summary>True where the text is a date or a date and time of any form that is read.</summary>
     public static bool LooksLikeTime(string text) =>
         LocalDatePattern.Iso.Parse(text).Success
@@ -35,14 +33,17 @@ internal sealed class LabelReader(string file, TimeStep step)
     /// <param name="column">Its column, from 1.</param>
     /// <param name="problems">Takes what is wrong.</param>
     /// <returns>The label; null where wrong.</returns>
-    public LocalDate? Read(string text, int line, int column, Problems problems)
+    public LocalDateTime? Read(string text, int line, int column, Problems problems)
     {
         if (
-            LocalDatePattern.Iso.Parse(text).TryGetValue(default, out var date)
-            || (months && Month.Parse(text).TryGetValue(default, out date))
+            step.LabelsAreDates
+            && (
+                LocalDatePattern.Iso.Parse(text).TryGetValue(default, out var date)
+                || (step == TimeStep.Months && Month.Parse(text).TryGetValue(default, out date))
+            )
         )
         {
-            return months ? date.With(DateAdjusters.StartOfMonth) : date;
+            return step.LabelOf(date.AtMidnight());
         }
 
         var place = new Place(file, line, column);
@@ -50,35 +51,40 @@ internal sealed class LabelReader(string file, TimeStep step)
         {
             if (pattern.Parse(text).TryGetValue(default, out var time))
             {
-                return EndingAt(time, text, place, problems);
+                return Named(time, text, place, problems);
             }
         }
 
-        var expected = months ? "2024-01" : "2024-01-31";
+        var expected = step.LabelText(step.LabelOf(new LocalDateTime(2024, 1, 31, 0, 0))!.Value);
         problems.Add(
             "RR0252",
             place,
             $"'{text}' is not a time of the form {expected}.",
-            "Write dates as year-month-day (ISO 8601)."
+            "Write dates as year-month-day, with hours and minutes where steps are shorter than a day (ISO 8601)."
         );
         return null;
     }
 
-    private LocalDate? EndingAt(LocalDateTime time, string text, Place place, Problems problems)
+    private LocalDateTime? Named(LocalDateTime time, string text, Place place, Problems problems)
     {
-        if (!months && step.IntervalOf(time.Date).End == time)
+        var label = step.LabelsAreDates ? step.LabelOf(time.Date.AtMidnight()) : step.LabelOf(time);
+        var midnight = time.TimeOfDay == LocalTime.Midnight;
+        if (
+            label is { } known
+            && (!step.LabelsAreDates || (step != TimeStep.Months && step.IntervalOf(known).End == time))
+        )
         {
-            return time.Date;
+            return known;
         }
 
-        var atMidnight = time.TimeOfDay == LocalTime.Midnight;
+        var mayBeEither = midnight && step.LabelsAreDates;
         problems.Add(
             "RR0253",
             place,
-            atMidnight
+            mayBeEither
                 ? $"'{text}' may mean the start or the end of a step of {step.ToSettingText()}."
                 : $"'{text}' is not the end of a step of {step.ToSettingText()}.",
-            atMidnight
+            mayBeEither
                 ? "Write the date alone (2024-01-31) where it names the day or month; where days end at midnight and are dated by the morning, read with TimeStep.Days(endingAt: \"00:00\")."
                 : "Give the step that the file has, such as TimeStep.Days(endingAt: \"07:00\")."
         );

@@ -28,7 +28,7 @@ internal static class RecordFindings
 
     private static void TellOfImpossible(StepContext context, RainRecords records)
     {
-        var limit = records.Step == TimeStep.Months ? LargestMonthMillimetres : LargestDayMillimetres;
+        var limit = records.Times.Step == TimeStep.Months ? LargestMonthMillimetres : LargestDayMillimetres;
         var found = Cells(records).Where(cell => records.DepthsAt(cell.Step)[cell.Gauge] > limit).ToArray();
         foreach (var (t, g) in found.Take(MostListed))
         {
@@ -38,7 +38,7 @@ internal static class RecordFindings
                     new Place(records.Source, Item: $"gauge {records.GaugeIds[g]}"),
                     string.Create(
                         CultureInfo.InvariantCulture,
-                        $"{records.DepthsAt(t)[g]:0.#} mm on {records.Step.LabelText(records.Labels[t])} is more than was ever measured anywhere in a step of this length ({limit} mm). {found.Length} values are."
+                        $"{records.DepthsAt(t)[g]:0.#} mm on {records.Times.TextAt(t)} is more than was ever measured anywhere in a step of this length ({limit} mm). {found.Length} values are."
                     ),
                     "Is the unit right? Is it a total of several steps, or a marker of a missing value?"
                 )
@@ -51,7 +51,7 @@ internal static class RecordFindings
         var silent = Enumerable
             .Range(0, records.GaugeIds.Length)
             .Where(g =>
-                Enumerable.Range(0, records.Labels.Length).All(t => records.StatusesAt(t)[g] == RecordStatus.Missing)
+                Enumerable.Range(0, records.Times.Count).All(t => records.StatusesAt(t)[g] == RecordStatus.Missing)
             )
             .ToArray();
         if (silent.Length > 0)
@@ -72,7 +72,7 @@ internal static class RecordFindings
         var silences = Enumerable
             .Range(0, records.GaugeIds.Length)
             .SelectMany(g => Silences(records, g))
-            .Where(silence => silence.Length >= LongSilence && silence.Length < records.Labels.Length)
+            .Where(silence => silence.Length >= LongSilence && silence.Length < records.Times.Count)
             .OrderByDescending(silence => silence.Length)
             .ThenBy(silence => silence.Gauge)
             .ThenBy(silence => silence.First)
@@ -98,8 +98,8 @@ internal static class RecordFindings
 
     private static string Words(RainRecords records, (int Gauge, int First, int Length) silence)
     {
-        var first = records.Step.LabelText(records.Labels[silence.First]);
-        var last = records.Step.LabelText(records.Labels[silence.First + silence.Length - 1]);
+        var first = records.Times.TextAt(silence.First);
+        var last = records.Times.TextAt(silence.First + silence.Length - 1);
         return string.Create(
             CultureInfo.InvariantCulture,
             $"{records.GaugeIds[silence.Gauge]} {first} to {last} ({silence.Length})"
@@ -109,9 +109,9 @@ internal static class RecordFindings
     private static IEnumerable<(int Gauge, int First, int Length)> Silences(RainRecords records, int gauge)
     {
         var length = 0;
-        for (var t = 0; t <= records.Labels.Length; t++)
+        for (var t = 0; t <= records.Times.Count; t++)
         {
-            if (t < records.Labels.Length && records.StatusesAt(t)[gauge] == RecordStatus.Missing)
+            if (t < records.Times.Count && records.StatusesAt(t)[gauge] == RecordStatus.Missing)
             {
                 length++;
             }
@@ -125,6 +125,6 @@ internal static class RecordFindings
 
     private static IEnumerable<(int Step, int Gauge)> Cells(RainRecords records) =>
         Enumerable
-            .Range(0, records.Labels.Length)
+            .Range(0, records.Times.Count)
             .SelectMany(t => Enumerable.Range(0, records.GaugeIds.Length).Select(g => (t, g)));
 }

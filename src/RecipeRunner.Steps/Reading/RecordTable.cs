@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using System.Globalization;
 using nietras.SeparatedValues;
 using NodaTime;
@@ -15,9 +14,9 @@ internal sealed class RecordTable(string file, TimeStep step, DepthReader depths
 
     private readonly LabelReader labels = new(file, step);
     private readonly Dictionary<string, int> gauges = new(StringComparer.Ordinal);
-    private readonly Dictionary<LocalDate, List<Cell>> rows = [];
-    private readonly Dictionary<LocalDate, int> lines = [];
-    private LocalDate? before;
+    private readonly Dictionary<LocalDateTime, List<Cell>> rows = [];
+    private readonly Dictionary<LocalDateTime, int> lines = [];
+    private LocalDateTime? before;
     private int outOfOrder;
 
     /// <summary>The file.</summary>
@@ -59,7 +58,10 @@ internal sealed class RecordTable(string file, TimeStep step, DepthReader depths
         var cells = new List<Cell>(gauges.Count);
         foreach (var (id, column) in gauges)
         {
-            if (depths.Read(row[column + 1].Span, line, column + 2, id, Problems) is { } depth)
+            if (
+                depths.Read(row[column + 1].Span, line, column + 2, id, step.IntervalOf(label).Hours, Problems) is
+                { } depth
+            )
             {
                 cells.Add(new Cell(column, depth));
             }
@@ -95,7 +97,7 @@ internal sealed class RecordTable(string file, TimeStep step, DepthReader depths
             rows.Add(label, cells = []);
         }
 
-        var depth = depths.Read(row[2].Span, line, 3, id, Problems);
+        var depth = depths.Read(row[2].Span, line, 3, id, step.IntervalOf(label).Hours, Problems);
         if (!seen.Add((column, label)))
         {
             Problems.Add(
@@ -111,7 +113,7 @@ internal sealed class RecordTable(string file, TimeStep step, DepthReader depths
         }
     }
 
-    private readonly HashSet<(int Column, LocalDate Label)> seen = [];
+    private readonly HashSet<(int Column, LocalDateTime Label)> seen = [];
 
     /// <summary>Makes the records.</summary>
     /// <exception cref="RefusedException">With every problem found.</exception>
@@ -133,11 +135,11 @@ internal sealed class RecordTable(string file, TimeStep step, DepthReader depths
             place[order[i].Value] = i;
         }
 
-        var values = new double[span.Length * order.Length];
+        var values = new double[span.Count * order.Length];
         var statuses = new RecordStatus[values.Length];
-        for (var t = 0; t < span.Length; t++)
+        for (var t = 0; t < span.Count; t++)
         {
-            foreach (var cell in rows.GetValueOrDefault(span[t]) ?? [])
+            foreach (var cell in rows.GetValueOrDefault(span.LabelAt(t)) ?? [])
             {
                 var at = (t * order.Length) + place[cell.Gauge];
                 values[at] = cell.Depth;
@@ -146,22 +148,22 @@ internal sealed class RecordTable(string file, TimeStep step, DepthReader depths
         }
 
         TellOfTimes(context, span);
-        var records = new RainRecords([.. order.Select(pair => pair.Key)], step, span, values, statuses, file);
+        var records = new RainRecords([.. order.Select(pair => pair.Key)], span, values, statuses, file);
         RecordFindings.Tell(context, records);
         return records;
     }
 
-    private void SeeOrder(LocalDate label)
+    private void SeeOrder(LocalDateTime label)
     {
         outOfOrder += before is { } earlier && label < earlier ? 1 : 0;
         before = label;
     }
 
     /// <summary>Every label from the first to the last.</summary>
-    private ImmutableArray<LocalDate> Span()
+    private Timeline Span()
     {
         var (first, last) = (rows.Keys.Min(), rows.Keys.Max());
-        if (Period.Between(first, last, PeriodUnits.Years).Years > LongestYears)
+        if (Period.Between(first.Date, last.Date, PeriodUnits.Years).Years > LongestYears)
         {
             throw new RefusedException(
                 Finding.Error(
@@ -175,16 +177,10 @@ internal sealed class RecordTable(string file, TimeStep step, DepthReader depths
             );
         }
 
-        var span = ImmutableArray.CreateBuilder<LocalDate>();
-        for (var label = first; label <= last; label = step.Next(label))
-        {
-            span.Add(label);
-        }
-
-        return span.ToImmutable();
+        return new Timeline(step, first, step.StepsBetween(first, last) + 1);
     }
 
-    private void TellOfTimes(StepContext context, ImmutableArray<LocalDate> span)
+    private void TellOfTimes(StepContext context, Timeline span)
     {
         if (outOfOrder > 0)
         {
@@ -201,7 +197,11 @@ internal sealed class RecordTable(string file, TimeStep step, DepthReader depths
             );
         }
 
-        var absent = span.Where(label => !rows.ContainsKey(label)).ToArray();
+        var absent = Enumerable
+            .Range(0, span.Count)
+            .Select(span.LabelAt)
+            .Where(label => !rows.ContainsKey(label))
+            .ToArray();
         if (absent.Length > 0)
         {
             context.Find(

@@ -10,12 +10,12 @@ namespace RecipeRunner.Steps.Series;
 internal sealed class ArealCalculation
 {
     private readonly GapPolicy gaps;
-    private readonly AtLeast reporting;
+    private readonly ReportingRule reporting;
     private readonly ImmutableArray<Weight>[] full;
     private readonly RedrawnWeights redrawn;
     private readonly BasinDistances distances;
 
-    public ArealCalculation(WeightTable weights, GapPolicy gaps, AtLeast reporting)
+    public ArealCalculation(WeightTable weights, GapPolicy gaps, ReportingRule reporting)
     {
         this.gaps = gaps;
         this.reporting = reporting;
@@ -50,12 +50,12 @@ internal sealed class ArealCalculation
             && (
                 gaps == GapPolicy.Withhold
                 || nearest is null
-                || !reporting.IsMetBy(share)
+                || !reporting.IsMetBy(count, share, nearest.Value)
                 || (gaps == GapPolicy.Rescale && count == 0)
             );
         if (withheld)
         {
-            return new ArealValue(null, ArealStatus.Withheld, count, share, nearest);
+            return new ArealValue(null, ArealStatus.Withheld, count, 0, share, nearest);
         }
 
         var depth =
@@ -66,6 +66,7 @@ internal sealed class ArealCalculation
             depth,
             complete ? ArealStatus.Complete : ArealStatus.Partial,
             count,
+            0,
             complete ? 1 : share,
             nearest
         );

@@ -2,6 +2,7 @@ using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Weights;
 using RecipeRunner.Model.Wording;
+using RecipeRunner.Steps.Records;
 
 namespace RecipeRunner.Steps.Series;
 
@@ -15,7 +16,7 @@ namespace RecipeRunner.Steps.Series;
 /// <param name="Reporting">The share of a basin's weight in the full network that must report.</param>
 /// <example><code>var areal = weights.MeanRain(rain, gaps: GapPolicy.Redraw, reporting: AtLeast.Percent(60));</code></example>
 [Step("Mean rain", Word = "rain", Source = "Thiessen 1911, doi:10.1175/1520-0493(1911)39<1082b:PAFLA>2.0.CO;2")]
-public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPolicy Gaps, AtLeast Reporting)
+public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPolicy Gaps, ReportingRule Reporting)
     : Step<ArealRainfall>
 {
     /// <inheritdoc/>
@@ -25,17 +26,17 @@ public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPoli
         var columns = RecordColumns.Match(context, network, Rain);
         var calculation = new ArealCalculation(Weights, Gaps, Reporting);
         var basins = Weights.Basins.Basins.Length;
-        var values = new ArealValue[Rain.Labels.Length * basins];
+        var values = new ArealValue[Rain.Times.Count * basins];
         var (depths, reports) = (new double[columns.Length], new bool[columns.Length]);
-        for (var t = 0; t < Rain.Labels.Length; t++)
+        for (var t = 0; t < Rain.Times.Count; t++)
         {
             context.Cancellation.ThrowIfCancellationRequested();
-            context.Progress((double)t / Rain.Labels.Length);
+            context.Progress((double)t / Rain.Times.Count);
             Gather(t, columns, depths, reports);
             calculation.Compute(depths, reports, values.AsSpan(t * basins, basins));
         }
 
-        var areal = new ArealRainfall(Weights.Basins, Rain.Step, Rain.Labels, values);
+        var areal = new ArealRainfall(Weights.Basins, Rain.Times, values);
         context.Assume(PolicyWords());
         context.Assume("A missing value is not zero: it is left out, as the gap policy says.");
         TellOfWithheld(context, areal);
@@ -49,7 +50,7 @@ public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPoli
         for (var gauge = 0; gauge < columns.Length; gauge++)
         {
             var column = columns[gauge];
-            reports[gauge] = column >= 0 && statuses[column] != RecordStatus.Missing;
+            reports[gauge] = column >= 0 && statuses[column].Reports();
             depths[gauge] = reports[gauge] ? row[column] : 0;
         }
     }
@@ -66,7 +67,7 @@ public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPoli
 
     private static void TellOfWithheld(StepContext context, ArealRainfall areal)
     {
-        var steps = areal.Labels.Length;
+        var steps = areal.Times.Count;
         var withheld = areal
             .Basins.Basins.Select(
                 (basin, b) =>
@@ -121,6 +122,6 @@ public static class MeanRainVerb
         this WeightTable weights,
         RainRecords rain,
         GapPolicy gaps,
-        AtLeast? reporting = null
-    ) => weights.Run(new MeanRainStep(weights, rain, gaps, reporting ?? AtLeast.Percent(0)));
+        ReportingRule? reporting = null
+    ) => weights.Run(new MeanRainStep(weights, rain, gaps, reporting ?? ReportingRule.Any));
 }

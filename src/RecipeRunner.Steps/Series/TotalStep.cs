@@ -1,5 +1,3 @@
-using System.Collections.Immutable;
-using NodaTime;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
@@ -18,66 +16,37 @@ namespace RecipeRunner.Steps.Series;
 /// <param name="Complete">The share of expected steps that must have a value; all of them where not given.</param>
 /// <example><code>var yearly = areal.Total(Every.WaterYear(firstMonth: 10), complete: AtLeast.Percent(95));</code></example>
 [Step("Total", Word = "total")]
-public sealed record TotalStep(ArealRainfall Areal, Every Period, AtLeast Complete) : Step<ArealTotals>
+public sealed record TotalStep(ArealRainfall Areal, Every Period, ICompletenessRule Complete) : Step<ArealTotals>
 {
     /// <inheritdoc/>
     public override ArealTotals Execute(StepContext context)
     {
-        if (Areal.Labels.IsEmpty)
-        {
-            throw new RefusedException(
-                Finding.Error(
-                    "RR0504",
-                    Place.Of("areal rainfall"),
-                    "There are no steps to sum.",
-                    "Check the span of the records."
-                )
-            );
-        }
-
-        var starts = Areal.Labels.Select(StartOf).Distinct().ToImmutableArray();
-        var steps = Areal
-            .Labels.Select((label, t) => (Start: StartOf(label), t))
-            .ToLookup(pair => pair.Start, pair => pair.t);
+        var periods = Periods.Of(Areal.Times, Period);
         var basins = Areal.Basins.Basins.Length;
-        var totals = starts
-            .Select(start => (Steps: steps[start].ToArray(), Expected: ExpectedFrom(start)))
-            .SelectMany(period =>
-                Enumerable.Range(0, basins).Select(basin => TotalOf(basin, period.Steps, period.Expected))
-            )
+        var totals = periods
+            .SelectMany(period => Enumerable.Range(0, basins).Select(basin => TotalOf(basin, period)))
             .ToArray();
         context.Assume("A step's rain belongs to the period that holds the date under which it is recorded.");
-        var result = new ArealTotals(Areal.Basins, Period, starts, totals);
+        var result = new ArealTotals(Areal.Basins, Period, [.. periods.Select(period => period.Start)], totals);
         TellOfShortSums(context, result);
         return result;
     }
 
-    private LocalDate StartOf(LocalDate label) => Period.StartOf(label, Areal.Labels[0]);
-
-    private int ExpectedFrom(LocalDate start)
-    {
-        var end = Period.EndOf(start, Areal.Step.Next(Areal.Labels[^1]));
-        var count = 0;
-        for (var label = start; label < end; label = Areal.Step.Next(label))
-        {
-            count++;
-        }
-
-        return count;
-    }
-
-    private ArealTotal TotalOf(int basin, IEnumerable<int> steps, int expected)
+    private ArealTotal TotalOf(int basin, StepsOfPeriod period)
     {
         var sum = default(CompensatedSum);
         var present = 0;
-        foreach (var depth in steps.Select(t => Areal.At(t, basin).DepthMillimetres).OfType<double>())
+        for (var t = period.FirstStep; t < period.FirstStep + period.Count; t++)
         {
-            sum.Add(depth);
-            present++;
+            if (Areal.At(t, basin).DepthMillimetres is { } depth)
+            {
+                sum.Add(depth);
+                present++;
+            }
         }
 
-        var enough = present > 0 && Complete.IsMetBy((double)present / expected);
-        return new ArealTotal(enough ? sum.Value : null, present, expected);
+        var enough = present > 0 && Complete.IsMetBy(present, period.Expected);
+        return new ArealTotal(enough ? sum.Value : null, present, period.Expected);
     }
 
     private void TellOfShortSums(StepContext context, ArealTotals totals)
@@ -134,6 +103,9 @@ public static class TotalVerb
     /// <param name="areal">Mean areal rainfall.</param>
     /// <param name="period">What to sum over; the whole record where not given.</param>
     /// <param name="complete">The share of expected steps that must have a value; all of them where not given.</param>
-    public static ArealTotals Total(this ArealRainfall areal, Every? period = null, AtLeast? complete = null) =>
-        areal.Run(new TotalStep(areal, period ?? Every.WholeRecord, complete ?? AtLeast.Percent(100)));
+    public static ArealTotals Total(
+        this ArealRainfall areal,
+        Every? period = null,
+        ICompletenessRule? complete = null
+    ) => areal.Run(new TotalStep(areal, period ?? Every.WholeRecord, complete ?? AtLeast.Percent(100)));
 }

@@ -134,8 +134,7 @@ public sealed class HandbookTests : IDisposable
         var records = bench.Study.Take(
             new RainRecords(
                 ids,
-                TimeStep.Days("24:00"),
-                [new NodaTime.LocalDate(2000, 1, 1)],
+                new Timeline(TimeStep.Days("24:00"), new NodaTime.LocalDateTime(2000, 1, 1, 0, 0), 1),
                 depths,
                 statuses,
                 "example"

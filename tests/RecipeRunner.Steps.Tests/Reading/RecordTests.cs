@@ -21,7 +21,7 @@ public sealed class RecordTests : IDisposable
         var records = Read(text);
 
         records.GaugeIds.ShouldBe(["A", "B"]);
-        records.Labels.ShouldBe([new LocalDate(2024, 1, 1), new LocalDate(2024, 1, 2)]);
+        records.Times.ShouldBe(new Timeline(Daily, new LocalDateTime(2024, 1, 1, 0, 0), 2));
         records.DepthsAt(0).ToArray().ShouldBe([0, 1.5]);
         records.StatusesAt(0).ToArray().ShouldBe([RecordStatus.Missing, RecordStatus.Observed]);
         records.DepthsAt(1).ToArray().ShouldBe([2.5, 0]);
@@ -31,8 +31,7 @@ public sealed class RecordTests : IDisposable
     [Theory]
     [InlineData("date,A\n2024-01-01,1\n2024-01-02,2\n\n\n")]
     [InlineData("date,A,,\n2024-01-01,1,,\n\n2024-01-02,2,,\n")]
-    public void Empty_lines_and_empty_columns_at_the_end_say_nothing(string text) =>
-        Read(text).Labels.Length.ShouldBe(2);
+    public void Empty_lines_and_empty_columns_at_the_end_say_nothing(string text) => Read(text).Times.Count.ShouldBe(2);
 
     [Fact]
     public void Midnight_is_refused_where_it_may_mean_either_end_of_a_step()
@@ -41,7 +40,7 @@ public sealed class RecordTests : IDisposable
 
         Bench.Refused(() => Read(Text, TimeStep.Days("24:00")))[0].Code.ShouldBe("RR0253");
         Bench.Refused(() => Read(Text, TimeStep.Months))[0].Code.ShouldBe("RR0253");
-        Read(Text, TimeStep.Days("00:00")).Labels[0].ShouldBe(new LocalDate(2024, 1, 1));
+        Read(Text, TimeStep.Days("00:00")).Times.First.ShouldBe(new LocalDateTime(2024, 1, 1, 0, 0));
     }
 
     [Fact]
@@ -62,7 +61,7 @@ public sealed class RecordTests : IDisposable
     {
         var text = $"date,A,B\n2024-01-01,{marker},1\n";
 
-        Read(text, missing: [marker]).MissingCount.ShouldBe(1);
+        Read(text, missing: [marker]).SilentCount.ShouldBe(1);
         var problem = Bench.Refused(() => Read(text))[0];
         problem.Code.ShouldBeOneOf("RR0250", "RR0251");
         (problem.Where.Line, problem.Where.Column, problem.Where.Item).ShouldBe((2, 2, "gauge A"));
@@ -110,8 +109,8 @@ public sealed class RecordTests : IDisposable
     {
         var records = Read("date,A\n2024-01-05,5\n2024-01-01,1\n2024-01-02,2\n");
 
-        records.Labels.Length.ShouldBe(5);
-        records.MissingCount.ShouldBe(2);
+        records.Times.Count.ShouldBe(5);
+        records.SilentCount.ShouldBe(2);
         records.DepthsAt(4)[0].ShouldBe(5);
         bench.Study.Findings.Select(finding => finding.Code).ShouldBe(["RR0257", "RR0258"]);
         bench.Study.Findings[1].What.ShouldContain("2024-01-03");
@@ -140,7 +139,7 @@ public sealed class RecordTests : IDisposable
         var records = Read("month,A\n2024-01,30\n2024-02,20\n", step: TimeStep.Months);
 
         records
-            .Step.IntervalOf(records.Labels[1])
+            .Times.IntervalAt(1)
             .ShouldBe(new RainInterval(new LocalDateTime(2024, 2, 1, 0, 0), new LocalDateTime(2024, 3, 1, 0, 0)));
     }
 
@@ -148,13 +147,16 @@ public sealed class RecordTests : IDisposable
     public void An_observation_day_ends_at_its_hour_on_its_date()
     {
         Daily
-            .IntervalOf(new LocalDate(2024, 3, 1))
+            .IntervalOf(new LocalDateTime(2024, 3, 1, 0, 0))
             .ShouldBe(new RainInterval(new LocalDateTime(2024, 2, 29, 9, 0), new LocalDateTime(2024, 3, 1, 9, 0)));
         TimeStep
             .Days("24:00")
-            .IntervalOf(new LocalDate(2024, 3, 1))
+            .IntervalOf(new LocalDateTime(2024, 3, 1, 0, 0))
             .ShouldBe(new RainInterval(new LocalDateTime(2024, 3, 1, 0, 0), new LocalDateTime(2024, 3, 2, 0, 0)));
-        TimeStep.Days("00:00").IntervalOf(new LocalDate(2024, 3, 1)).End.ShouldBe(new LocalDateTime(2024, 3, 1, 0, 0));
+        TimeStep
+            .Days("00:00")
+            .IntervalOf(new LocalDateTime(2024, 3, 1, 0, 0))
+            .End.ShouldBe(new LocalDateTime(2024, 3, 1, 0, 0));
         Bench.Refused(() => TimeStep.Days("9 am"))[0].Code.ShouldBe("RR0501");
     }
 

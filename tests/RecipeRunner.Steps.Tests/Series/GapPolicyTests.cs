@@ -35,7 +35,7 @@ public sealed class GapPolicyTests : IDisposable
         var value = weights.MeanRain(Rain([10, 20, 30, null]), gaps).At(0, 0);
 
         value.DepthMillimetres!.Value.ShouldBe(expected, 1e-11);
-        value.ShouldBe(new ArealValue(value.DepthMillimetres, ArealStatus.Partial, 3, 0.75, 0));
+        value.ShouldBe(new ArealValue(value.DepthMillimetres, ArealStatus.Partial, 3, 0, 0.75, 0));
     }
 
     [Theory]
@@ -46,7 +46,7 @@ public sealed class GapPolicyTests : IDisposable
     {
         var value = weights.MeanRain(Rain([10, 20, 30, 40]), gaps).At(0, 0);
 
-        value.ShouldBe(new ArealValue(25, ArealStatus.Complete, 4, 1, 0));
+        value.ShouldBe(new ArealValue(25, ArealStatus.Complete, 4, 0, 1, 0));
     }
 
     [Fact]
@@ -72,8 +72,8 @@ public sealed class GapPolicyTests : IDisposable
     {
         var areal = weights.MeanRain(Rain([null, 7, null, null], [null, null, null, null]), GapPolicy.Redraw);
 
-        areal.At(0, 0).ShouldBe(new ArealValue(7, ArealStatus.Partial, 1, 0.25, 0));
-        areal.At(1, 0).ShouldBe(new ArealValue(null, ArealStatus.Withheld, 0, 0, null));
+        areal.At(0, 0).ShouldBe(new ArealValue(7, ArealStatus.Partial, 1, 0, 0.25, 0));
+        areal.At(1, 0).ShouldBe(new ArealValue(null, ArealStatus.Withheld, 0, 0, 0, null));
     }
 
     [Fact]
@@ -84,7 +84,7 @@ public sealed class GapPolicyTests : IDisposable
         bench.Write("rain.csv", "date,A,far\n2024-01-01,,8\n");
         var rain = bench.Verbs.ReadRecords("rain.csv", RainUnit.Millimetres, TimeStep.Days("24:00"));
 
-        basin.MeanRain(rain, GapPolicy.Redraw).At(0, 0).ShouldBe(new ArealValue(8, ArealStatus.Partial, 0, 0, 4800));
+        basin.MeanRain(rain, GapPolicy.Redraw).At(0, 0).ShouldBe(new ArealValue(8, ArealStatus.Partial, 0, 0, 0, 4800));
         basin.MeanRain(rain, GapPolicy.Rescale).At(0, 0).Status.ShouldBe(ArealStatus.Withheld);
         basin.MeanRain(rain, GapPolicy.Redraw, AtLeast.Percent(1)).At(0, 0).Status.ShouldBe(ArealStatus.Withheld);
     }
@@ -136,15 +136,10 @@ public sealed class GapPolicyTests : IDisposable
                     .Select(i => FormattableString.Invariant($"G{i:00}"))
                     .ToImmutableArray();
         var flat = steps.SelectMany(step => step).ToArray();
-        var labels = Enumerable
-            .Range(1, steps.Length)
-            .Select(day => new NodaTime.LocalDate(2024, 1, day))
-            .ToImmutableArray();
         return bench.Study.Take(
             new RainRecords(
                 ids,
-                TimeStep.Days("24:00"),
-                labels,
+                new Timeline(TimeStep.Days("24:00"), new NodaTime.LocalDateTime(2024, 1, 1, 0, 0), steps.Length),
                 [.. flat.Select(depth => depth ?? 0)],
                 [.. flat.Select(depth => depth is null ? RecordStatus.Missing : RecordStatus.Observed)],
                 "records of a test"

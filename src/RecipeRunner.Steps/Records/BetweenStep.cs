@@ -3,9 +3,12 @@ using NodaTime.Text;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 
-namespace RecipeRunner.Steps.Series;
+namespace RecipeRunner.Steps.Records;
 
-/// <summary>Takes the steps of records from one date to another, both included. Dates are those that the file gives.</summary>
+/// <summary>
+/// Takes the steps of records from one date to another, both included. Dates are those that the file gives; a step of hours or
+/// minutes belongs to the date on which it starts.
+/// </summary>
 /// <param name="Rain">Gauge records.</param>
 /// <param name="First">The first date, <c>2024-01-01</c>.</param>
 /// <param name="Last">The last date, <c>2024-12-31</c>.</param>
@@ -18,8 +21,8 @@ public sealed record BetweenStep(RainRecords Rain, string First, string Last) : 
     {
         var (first, last) = (Date(First), Date(Last));
         var steps = Enumerable
-            .Range(0, Rain.Labels.Length)
-            .Where(t => Rain.Labels[t] >= first && Rain.Labels[t] <= last)
+            .Range(0, Rain.Times.Count)
+            .Where(t => Rain.Times.DateAt(t) is var date && date >= first && date <= last)
             .ToArray();
         if (steps.Length == 0)
         {
@@ -28,40 +31,70 @@ public sealed record BetweenStep(RainRecords Rain, string First, string Last) : 
                     "RR0515",
                     new Place(Rain.Source),
                     $"There are no steps from {First} to {Last}.",
-                    $"The records run from {Rain.Step.LabelText(Rain.Labels[0])} to {Rain.Step.LabelText(Rain.Labels[^1])}."
+                    $"The records run from {Rain.Times}."
                 )
             );
         }
 
         TellOfShortSpan(context, first, last);
+        TellOfCutTotals(context, steps[0], steps[^1]);
+        return Cut(steps[0], steps.Length);
+    }
+
+    private RainRecords Cut(int first, int count)
+    {
         var gauges = Rain.GaugeIds.Length;
-        var (depths, statuses) = (new double[steps.Length * gauges], new RecordStatus[steps.Length * gauges]);
-        for (var i = 0; i < steps.Length; i++)
+        var (depths, statuses) = (new double[count * gauges], new RecordStatus[count * gauges]);
+        for (var t = 0; t < count; t++)
         {
-            Rain.DepthsAt(steps[i]).CopyTo(depths.AsSpan(i * gauges));
-            Rain.StatusesAt(steps[i]).CopyTo(statuses.AsSpan(i * gauges));
+            Rain.DepthsAt(first + t).CopyTo(depths.AsSpan(t * gauges));
+            Rain.StatusesAt(first + t).CopyTo(statuses.AsSpan(t * gauges));
         }
 
+        var totals = Rain
+            .Accumulations.Where(total => total.FirstStep >= first && total.LastStep < first + count)
+            .Select(total => total with { FirstStep = total.FirstStep - first, LastStep = total.LastStep - first });
         return new RainRecords(
             Rain.GaugeIds,
-            Rain.Step,
-            [.. steps.Select(t => Rain.Labels[t])],
+            Rain.Times.Slice(first, count),
             depths,
             statuses,
-            Rain.Source
+            Rain.Source,
+            [.. totals]
         );
     }
 
     private void TellOfShortSpan(StepContext context, LocalDate first, LocalDate last)
     {
-        if (Rain.Labels[0] > first || Rain.Step.Next(Rain.Labels[^1]) <= last)
+        var step = Rain.Times.Step;
+        if (step.DateOf(Rain.Times.First) > first || step.DateOf(step.After(Rain.Times.Last, 1)) <= last)
         {
             context.Find(
                 Finding.Caution(
                     "RR0516",
                     new Place(Rain.Source),
-                    $"The records do not reach from {First} to {Last}: they run from {Rain.Step.LabelText(Rain.Labels[0])} to {Rain.Step.LabelText(Rain.Labels[^1])}.",
+                    $"The records do not reach from {First} to {Last}: they run from {Rain.Times}.",
                     "Sums over the span asked for would be too low."
+                )
+            );
+        }
+    }
+
+    private void TellOfCutTotals(StepContext context, int first, int last)
+    {
+        var cut = Rain.Accumulations.Count(total =>
+            total.FirstStep <= last && total.LastStep >= first && (total.FirstStep < first || total.LastStep > last)
+        );
+        if (cut > 0)
+        {
+            context.Find(
+                Finding.Notice(
+                    "RR0522",
+                    new Place(Rain.Source),
+                    FormattableString.Invariant(
+                        $"{cut} accumulated totals reach over the first or last date; their steps stay without a value."
+                    ),
+                    "Spread accumulations before taking a span."
                 )
             );
         }

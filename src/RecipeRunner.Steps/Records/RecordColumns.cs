@@ -3,7 +3,7 @@ using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Wording;
 
-namespace RecipeRunner.Steps.Series;
+namespace RecipeRunner.Steps.Records;
 
 /// <summary>Matches the gauges of a network to the columns of records.</summary>
 internal static class RecordColumns

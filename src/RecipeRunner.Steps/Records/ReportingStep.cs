@@ -3,7 +3,7 @@ using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Wording;
 
-namespace RecipeRunner.Steps.Series;
+namespace RecipeRunner.Steps.Records;
 
 /// <summary>Takes the gauges that reported at every step of some records, to draw the cells that were in force then.</summary>
 /// <param name="Gauges">The network.</param>
@@ -39,14 +39,14 @@ public sealed record ReportingStep(GaugeNetwork Gauges, RainRecords Rain) : Step
                 Finding.Notice(
                     "RR0519",
                     new Place(Rain.Source),
-                    $"Left out, because silent at some step from {Rain.Step.LabelText(Rain.Labels[0])} to {Rain.Step.LabelText(Rain.Labels[^1])}: {Listing.Of(silent)}."
+                    $"Left out, because silent at some step from {Rain.Times}: {Listing.Of(silent)}."
                 )
             );
         }
     }
 
     private bool ReportsAlways(int column) =>
-        Enumerable.Range(0, Rain.Labels.Length).All(t => Rain.StatusesAt(t)[column] != RecordStatus.Missing);
+        Enumerable.Range(0, Rain.Times.Count).All(t => Rain.StatusesAt(t)[column].Reports());
 }
 
 /// <summary>The verb for <see cref="ReportingStep"/>.</summary>
