@@ -27,6 +27,7 @@ internal static class Kitchen
                 "RecipeRunner.Steps.Emitting",
                 "RecipeRunner.Steps.Reading",
                 "RecipeRunner.Steps.Referencing",
+                "RecipeRunner.Steps.Answers",
                 "RecipeRunner.Steps.Records",
                 "RecipeRunner.Steps.Series",
                 "RecipeRunner.Steps.Weighting",

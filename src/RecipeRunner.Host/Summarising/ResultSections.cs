@@ -1,6 +1,7 @@
 using System.Globalization;
 using RecipeRunner.Host.Running;
 using RecipeRunner.Model.Rain;
+using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Weights;
 
 namespace RecipeRunner.Host.Summarising;
@@ -34,6 +35,9 @@ internal static class ResultSections
                 break;
             case WeightTable weights:
                 WeightsSection(page, weights, from);
+                break;
+            case IShownTable shown:
+                ShownSection(page, shown, from);
                 break;
         }
     }
@@ -117,6 +121,25 @@ internal static class ResultSections
 
         TellOfRest(page, Math.Max(basins.Length, periods.Length) - MostRows, "rows");
     }
+
+    private static void ShownSection(Html page, IShownTable shown, string from)
+    {
+        var table = shown.ToTable();
+        page.Element("h2", shown.Heading);
+        page.Table(
+            from,
+            [.. table.Columns.Select(column => column.Kind == ColumnKind.Text ? column.Name : ">" + column.Name)],
+            Enumerable
+                .Range(0, Math.Min(table.RowCount, MostRows))
+                .Select(row => (string[])[.. table.Columns.Select(column => CellOf(column, row))])
+        );
+        TellOfRest(page, table.RowCount - MostRows, "rows");
+    }
+
+    private static string CellOf(Column column, int row) =>
+        column.Kind == ColumnKind.Text ? column.Texts[row]
+        : column.Numbers[row] is not { } number ? ""
+        : Html.Number(number, column.Kind == ColumnKind.Count ? "0" : "0.0##");
 
     private static void TellOfRest(Html page, int rest, string what)
     {

@@ -22,6 +22,11 @@ public static class StudyFacts
             yield return ("gauges", Gauges(weights));
         }
 
+        if (record.Results<RainRecords>().LastOrDefault() is { } rain)
+        {
+            yield return ("values", rain.StatusWords());
+        }
+
         var series = record.Results<ArealRainfall>().ToArray();
         if (series.Length > 0)
         {

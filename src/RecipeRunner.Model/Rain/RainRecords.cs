@@ -86,6 +86,12 @@ public sealed class RainRecords : Artifact
     /// <param name="step">Index of the step.</param>
     public ReadOnlySpan<RecordStatus> StatusesAt(int step) => statuses.AsSpan(step * GaugeIds.Length, GaugeIds.Length);
 
+    /// <summary>A copy of all depths, step after step, to make other records of.</summary>
+    public double[] CopyDepths() => [.. depthsMillimetres];
+
+    /// <summary>A copy of all statuses, in the same order.</summary>
+    public RecordStatus[] CopyStatuses() => [.. statuses];
+
     /// <summary>How many values have each status, in the order of <see cref="RecordStatus"/>.</summary>
     public ImmutableArray<int> CountByStatus()
     {

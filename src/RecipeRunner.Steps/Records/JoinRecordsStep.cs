@@ -1,0 +1,81 @@
+using System.Collections.Immutable;
+using System.Globalization;
+using RecipeRunner.Model.Rain;
+using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Time;
+using RecipeRunner.Model.Wording;
+
+namespace RecipeRunner.Steps.Records;
+
+/// <summary>
+/// Puts records of other gauges, or of the same gauges at other times, beside each other. Both must have the same steps: the same
+/// length, the same observation day, the same clock. Where both have a value for one gauge and step they must agree.
+/// </summary>
+/// <param name="Rain">Gauge records.</param>
+/// <param name="More">Further records.</param>
+/// <example><code>var all = daily.And(hourly.ToDays(endingAt: "09:00"));</code></example>
+[Step("Join records", Word = "join")]
+public sealed record JoinRecordsStep(RainRecords Rain, RainRecords More) : Step<RainRecords>
+{
+    /// <inheritdoc/>
+    public override RainRecords Execute(StepContext context)
+    {
+        RequireSameSteps();
+        var times = Span();
+        ImmutableArray<string> ids =
+        [
+            .. Rain.GaugeIds.Union(More.GaugeIds, StringComparer.Ordinal).Order(StringComparer.Ordinal),
+        ];
+        var joined = new JoinedValues(ids, times);
+        var problems = new Problems();
+        joined.Add(Rain, problems);
+        joined.Add(More, problems);
+        problems.ThrowIfAny();
+        if (joined.Agreeing > 0)
+        {
+            context.Find(
+                Finding.Notice(
+                    "RR0531",
+                    new Place(More.Source),
+                    string.Create(
+                        CultureInfo.InvariantCulture,
+                        $"{joined.Agreeing} values stand in {Rain.Source} as well, and agree."
+                    )
+                )
+            );
+        }
+
+        return joined.ToRecords($"{Rain.Source} and {More.Source}");
+    }
+
+    private void RequireSameSteps()
+    {
+        if (Rain.Times.Step != More.Times.Step)
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0532",
+                    new Place(More.Source),
+                    $"Steps differ: {Listing.Of(Rain.GaugeIds)} of {Rain.Source} have {Rain.Times.Step.ToSettingText()}, {Listing.Of(More.GaugeIds)} of {More.Source} have {More.Times.Step.ToSettingText()}.",
+                    "Bring both to one step first: hours to days with .ToDays(endingAt: …), days to months with .ToMonths(). Days of different ending cannot be brought together."
+                )
+            );
+        }
+    }
+
+    private Timeline Span()
+    {
+        var first = Rain.Times.First < More.Times.First ? Rain.Times.First : More.Times.First;
+        var last = Rain.Times.Last > More.Times.Last ? Rain.Times.Last : More.Times.Last;
+        return new Timeline(Rain.Times.Step, first, Rain.Times.Step.StepsBetween(first, last) + 1);
+    }
+}
+
+/// <summary>The verb for <see cref="JoinRecordsStep"/>.</summary>
+public static class JoinRecordsVerb
+{
+    /// <inheritdoc cref="JoinRecordsStep"/>
+    /// <param name="rain">Gauge records.</param>
+    /// <param name="more">Further records.</param>
+    public static RainRecords And(this RainRecords rain, RainRecords more) => rain.Run(new JoinRecordsStep(rain, more));
+}
