@@ -1,11 +1,13 @@
 #!/usr/bin/env python3
-"""Makes the demo data of Recipe Runner: an invented region, its gauges, and two years of invented daily rain.
+"""Makes the demo data of Recipe Runner: an invented region, its gauges, and invented rain of two years, of sixty, and by the hour.
 
 Nothing here was measured. Same script, same bytes (Python 3.11, pyproj 3.4.1, pyshp 2.3.1 and shapely 1.8.5 of
 Debian 12). Run it in its own folder:  apt-get install python3-pyproj python3-pyshp python3-shapely; python3 generate.py
 """
 import csv
 import datetime
+import gzip
+import io
 import math
 import random
 
@@ -104,9 +106,9 @@ def write_gauges():
     write_csv("awkward/gauges-coincident.csv", ["gauge", "lon", "lat", "elev_m"], rows + [twin])
 
 
-def weather(days):
+def weather(days, seed="weather"):
     """Depths in tenths of mm: wet and dry spells, storms with a middle and a reach, more rain on high ground."""
-    rng = random.Random("weather")
+    rng = random.Random(seed)
     wet = False
     for day in days:
         season = math.cos(2 * math.pi * (day.timetuple().tm_yday - 200) / 365.25)  # most in July
@@ -151,6 +153,72 @@ def write_records():
     write_csv("daily.csv", ["date"] + [key for key, *_ in GAUGES], rows)
 
 
+# Years in which gauges of the long record opened and closed; those not named were there all the time.
+OPENED = {"Q-04": 1978, "Q-08": 1969, "Q-10": 1991, "Q-13": 2023, "Q-17": 1983, "Q-20": 2001, "Q-22": 1972}
+CLOSED = {"Q-02": 2009, "Q-15": 1994, "Q-18": 2024, "Q-21": 1987}
+WEEKEND_READERS = {"Q-03": 1990, "Q-12": 1985, "Q-16": 1999}  # until then read on Mondays for three days at once
+
+
+def long_silences(days):
+    """Days without a reading over sixty years: openings, closures, bursts from days to months, odd days."""
+    rng = random.Random("long silences")
+    silent = {}
+    for key, *_ in GAUGES:
+        gone = {d for d in days if rng.random() < 0.008}
+        gone |= {d for d in days if d.year < OPENED.get(key, 0) or d.year > CLOSED.get(key, 9999)}
+        start = 0
+        while start < len(days):
+            start += int(rng.expovariate(1 / 900)) + 1
+            gone |= set(days[start:start + int(rng.lognormvariate(2.2, 1.1))])
+        silent[key] = gone
+    return silent
+
+
+def long_row(day, depths, silent):
+    """One day of the long record: -9999 missing, T a trace, A caught but read later."""
+    rng = random.Random(f"long {day.isoformat()}")
+    cells = []
+    for (key, *_), depth in zip(GAUGES, depths):
+        trace = rng.random() < 0.04
+        weekend = day.year < WEEKEND_READERS.get(key, 0) and day.weekday() in (5, 6)
+        cells.append("-9999" if day in silent[key] else "A" if weekend else "T" if depth == 0 and trace else f"{depth / 10:.1f}")
+    return cells
+
+
+def write_long_record():
+    first, last = datetime.date(1964, 10, 1), datetime.date(2024, 9, 30)
+    days = [first + datetime.timedelta(n) for n in range((last - first).days + 1)]
+    silent = long_silences(days)
+    held = {key: 0 for key, *_ in GAUGES}
+    text = io.StringIO()
+    writer = csv.writer(text, lineterminator="\n")
+    writer.writerow(["date"] + [key for key, *_ in GAUGES])
+    for day, depths in zip(days, weather(days, "long weather")):
+        cells = long_row(day, depths, silent)
+        for i, (key, *_) in enumerate(GAUGES):
+            if cells[i] == "A":
+                held[key] += depths[i]
+            elif held[key]:
+                cells[i] = cells[i] if cells[i] == "-9999" else f"{(depths[i] + held[key]) / 10:.1f}"
+                held[key] = 0
+        writer.writerow([day.isoformat()] + cells)
+    with open("daily-sixty-years.csv.gz", "wb") as handle:
+        handle.write(gzip.compress(text.getvalue().encode("utf-8"), 9, mtime=0))
+
+
+def write_hourly():
+    """Three months of hours at one gauge, so that days of another ending can be made of them; times are the ends of hours."""
+    rng = random.Random("hours")
+    time, wet, rows = datetime.datetime(2024, 6, 1), False, []
+    while time < datetime.datetime(2024, 9, 1):
+        time += datetime.timedelta(hours=1)
+        wet = rng.random() < (0.75 if wet else 0.03)
+        depth = rng.gammavariate(0.7, 1.6) if wet else 0
+        silent = datetime.datetime(2024, 7, 20, 3) < time <= datetime.datetime(2024, 7, 22, 18)
+        rows.append([time.strftime("%Y-%m-%dT%H:%M"), "" if silent else f"{depth:.1f}"])
+    write_csv("hourly-Q-19.csv", ["time", "Q-19"], rows)
+
+
 def write_csv(name, head, rows):
     with open(name, "w", encoding="utf-8", newline="") as handle:
         writer = csv.writer(handle, lineterminator="\n")
@@ -161,3 +229,5 @@ def write_csv(name, head, rows):
 write_basins()
 write_gauges()
 write_records()
+write_long_record()
+write_hourly()
