@@ -65,7 +65,9 @@ public sealed class ThiessenCells
     /// <exception cref="ArgumentOutOfRangeException">A coordinate beyond the lattice's reach.</exception>
     public int Nearest(double x, double y) => Graph.Sites.CallerIndex[Graph.Nearest(Lattice.Snap(x), Lattice.Snap(y))];
 
-    private int RankOf(int site)
+    /// <summary>A site's number in the graph.</summary>
+    /// <exception cref="ArgumentOutOfRangeException">There is no such site.</exception>
+    internal int RankOf(int site)
     {
         ArgumentOutOfRangeException.ThrowIfNegative(site);
         ArgumentOutOfRangeException.ThrowIfGreaterThanOrEqual(site, rankOf.Length);

@@ -15,11 +15,17 @@ internal static class Bridge
     private const double DigitsPart = 1.0 / (1L << 50);
 
     /// <summary>The walls to cross, in order, to come from one site's cell to another's; null if none pass the point.</summary>
-    public static IReadOnlyList<int>? Between(CellGraph graph, int from, int to, double x, double y)
+    /// <param name="graph">The cells.</param>
+    /// <param name="from">Rank of the one site.</param>
+    /// <param name="to">Rank of the other.</param>
+    /// <param name="x">Easting of the point.</param>
+    /// <param name="y">Northing of the point.</param>
+    /// <param name="digits">The size of the coordinates that the point was computed from.</param>
+    public static IReadOnlyList<int>? Between(CellGraph graph, int from, int to, double x, double y, double digits)
     {
         double tolerance =
             (RoundingPart * Math.Max(FarthestWall(graph, from, x, y), FarthestWall(graph, to, x, y)))
-            + (DigitsPart * (Math.Abs(x) + Math.Abs(y)));
+            + (DigitsPart * digits);
         var cameBy = new Dictionary<int, int> { [from] = -1 };
         var reached = new List<int> { from };
         for (int next = 0; next < reached.Count && !cameBy.ContainsKey(to); next++)

@@ -24,6 +24,8 @@ internal sealed class RingWalk(CellGraph graph)
     private int site;
     private double originX;
     private double originY;
+    private double startX;
+    private double startY;
     private double x;
     private double y;
     private double entryX;
@@ -36,21 +38,22 @@ internal sealed class RingWalk(CellGraph graph)
     public List<Visit> Visits => visits;
 
     /// <summary>Walks a ring; false if the way does not close, as for a ring that rounding leaves no inside.</summary>
-    public bool Follow(ReadOnlySpan<double> ringX, ReadOnlySpan<double> ringY)
+    public bool Follow(Ring ring)
     {
-        (originX, originY) = (ringX[0], ringY[0]);
+        (originX, originY) = (ring.OriginX, ring.OriginY);
+        (startX, startY) = (ring.X[0] - ring.SubtractedX, ring.Y[0] - ring.SubtractedY);
         visits.Clear();
         Locate();
         visits.Clear();
         int first = site;
-        Round(ringX, ringY);
+        Round(ring);
         return Close(first);
     }
 
     /// <summary>Ends the walk where it began, in the same cell.</summary>
     private bool Close(int first)
     {
-        IReadOnlyList<int>? bridge = site == first ? [] : Bridge.Between(graph, site, first, originX, originY);
+        IReadOnlyList<int>? bridge = site == first ? [] : BridgeTo(first);
         foreach (int slot in bridge ?? [])
         {
             Leave(slot);
@@ -58,6 +61,12 @@ internal sealed class RingWalk(CellGraph graph)
 
         visits.Add(new Visit(site, NoExit, entryX, entryY, x, y, twiceSwept, length));
         return bridge is not null;
+    }
+
+    private IReadOnlyList<int>? BridgeTo(int first)
+    {
+        double digits = Math.Abs(originX) + Math.Abs(originY) + Math.Abs(startX) + Math.Abs(startY);
+        return Bridge.Between(graph, site, first, originX + startX, originY + startY, digits);
     }
 
     private void Leave(int slot)
@@ -70,31 +79,35 @@ internal sealed class RingWalk(CellGraph graph)
     /// <summary>Finds the cell of the ring's first point: from a site near to it, which is in its own cell, by a straight walk.</summary>
     private void Locate()
     {
-        site = graph.Sites.NearOnCurve(originX, originY);
+        site = graph.Sites.NearOnCurve(originX + startX, originY + startY);
         (x, y) = (graph.Sites.X[site] - originX, graph.Sites.Y[site] - originY);
-        GoTo(0, 0);
+        GoTo(startX, startY);
     }
 
-    private void Round(ReadOnlySpan<double> ringX, ReadOnlySpan<double> ringY)
+    private void Round(Ring ring)
     {
-        (x, y) = (0, 0);
+        (x, y) = (startX, startY);
         Enter();
         room = 0;
         int next = 1;
-        while (next < ringX.Length)
+        while (next < ring.X.Length)
         {
-            GoTo(ringX[next] - originX, ringY[next] - originY);
-            next = StayInRoom(ringX, ringY, next + 1);
+            GoTo(ring.X[next] - ring.SubtractedX, ring.Y[next] - ring.SubtractedY);
+            next = StayInRoom(ring, next + 1);
         }
 
-        GoTo(0, 0);
+        GoTo(startX, startY);
     }
 
     /// <summary>
     /// Passes points for as long as they are nearer to the present one than any wall; returns the first that is not.
     /// </summary>
-    private int StayInRoom(ReadOnlySpan<double> ringX, ReadOnlySpan<double> ringY, int next)
+    private int StayInRoom(Ring ring, int next)
     {
+        ReadOnlySpan<double> ringX = ring.X;
+        ReadOnlySpan<double> ringY = ring.Y;
+        double subtractedX = ring.SubtractedX;
+        double subtractedY = ring.SubtractedY;
         double roomSquared = room * room;
         double anchorX = x;
         double anchorY = y;
@@ -104,8 +117,8 @@ internal sealed class RingWalk(CellGraph graph)
         double path = 0;
         for (; next < ringX.Length; next++)
         {
-            double toX = ringX[next] - originX;
-            double toY = ringY[next] - originY;
+            double toX = ringX[next] - subtractedX;
+            double toY = ringY[next] - subtractedY;
             double awayX = toX - anchorX;
             double awayY = toY - anchorY;
             if (!((awayX * awayX) + (awayY * awayY) < roomSquared))

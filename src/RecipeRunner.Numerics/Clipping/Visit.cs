@@ -4,7 +4,7 @@ namespace RecipeRunner.Numerics.Clipping;
 
 /// <summary>
 /// One stay of a ring in one cell: from where it came in to where it left, and what it swept about the point of entry.
-/// Coordinates are relative to the ring's first point.
+/// Coordinates are offsets from the ring's origin.
 /// </summary>
 /// <param name="Site">Rank of the site whose cell it is.</param>
 /// <param name="ExitSlot">The wall crossed on leaving, or <see cref="RingWalk.NoExit"/> where the ring ends.</param>

@@ -2,7 +2,7 @@ using System.Runtime.InteropServices;
 
 namespace RecipeRunner.Numerics.Weights;
 
-/// <summary>What a ring has in one cell, while it is added up; coordinates relative to the ring's first point.</summary>
+/// <summary>What a ring has in one cell, while it is added up; coordinates are offsets from the ring's origin.</summary>
 [StructLayout(LayoutKind.Auto)]
 internal struct Piece(int site, double aboutX, double aboutY)
 {

@@ -27,15 +27,15 @@ internal sealed class PieceAreas(CellGraph graph)
     public ReadOnlySpan<Piece> Pieces => CollectionsMarshal.AsSpan(pieces);
 
     /// <summary>Cuts a ring by the cells; false when the ring has no inside that rounding leaves to be seen.</summary>
-    public bool Cut(ReadOnlySpan<double> ringX, ReadOnlySpan<double> ringY)
+    public bool Cut(Ring ring)
     {
         Forget();
-        if (!walk.Follow(ringX, ringY))
+        if (!walk.Follow(ring))
         {
             return false;
         }
 
-        (originX, originY) = (ringX[0], ringY[0]);
+        (originX, originY) = (ring.OriginX, ring.OriginY);
         foreach (Visit visit in walk.Visits)
         {
             AddPath(visit);
