@@ -25,23 +25,30 @@ public sealed class Problems
     /// <exception cref="RefusedException">Something was added.</exception>
     public void ThrowIfAny()
     {
+        if (Count > 0)
+        {
+            throw ToRefusal();
+        }
+    }
+
+    /// <summary>The refusal to throw, which counts those that are not listed.</summary>
+    /// <exception cref="InvalidOperationException">Nothing was added.</exception>
+    public RefusedException ToRefusal()
+    {
         if (Count == 0)
         {
-            return;
+            throw new InvalidOperationException("There is no problem to refuse for.");
         }
 
-        if (Count > kept.Count)
-        {
-            var first = kept[0];
-            kept.Add(
+        return Count == kept.Count
+            ? new RefusedException([.. kept])
+            : new RefusedException([
+                .. kept,
                 Finding.Error(
-                    first.Code,
-                    new Place(first.Where.File),
+                    kept[0].Code,
+                    new Place(kept[0].Where.File),
                     FormattableString.Invariant($"{Count - Limit} further problems are not listed.")
-                )
-            );
-        }
-
-        throw new RefusedException([.. kept]);
+                ),
+            ]);
     }
 }

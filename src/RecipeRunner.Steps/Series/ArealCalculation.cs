@@ -1,119 +1,120 @@
-using System.Collections.Immutable;
 using RecipeRunner.Model.Rain;
+using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Weights;
-using RecipeRunner.Numerics.Statistics;
+using RecipeRunner.Numerics.Gaps;
+using RecipeRunner.Numerics.Weights;
 using RecipeRunner.Steps.Weighting;
 
 namespace RecipeRunner.Steps.Series;
 
-/// <summary>Weighs the depths of one step after another.</summary>
+/// <summary>
+/// Weighs the depths of a record, block after block of steps. Whether a value is given, and what it rests on, is found the same way
+/// under every gap policy; only then the policy says how the mean is taken.
+/// </summary>
 internal sealed class ArealCalculation
 {
-    private readonly GapPolicy gaps;
-    private readonly ReportingRule reporting;
-    private readonly ImmutableArray<Weight>[] full;
-    private readonly RedrawnWeights redrawn;
+    private const int BlockSteps = 1024;
+
+    private readonly WeightTable weights;
+    private readonly RainRecords rain;
+    private readonly int[] columns;
+    private readonly BasinOwners owners;
     private readonly BasinDistances distances;
+    private readonly Lazy<ReportingWeights> redrawn;
 
-    public ArealCalculation(WeightTable weights, GapPolicy gaps, ReportingRule reporting)
+    /// <summary>Prepares the weighing.</summary>
+    /// <param name="weights">Weights of the full network.</param>
+    /// <param name="rain">Gauge records.</param>
+    /// <param name="columns">For each gauge of the network the column of its record; -1 where it has none.</param>
+    public ArealCalculation(WeightTable weights, RainRecords rain, int[] columns)
     {
-        this.gaps = gaps;
-        this.reporting = reporting;
-        var byBasin = weights.Weights.ToLookup(weight => weight.Basin);
-        full =
-        [
-            .. Enumerable.Range(0, weights.Basins.Basins.Length).Select(basin => byBasin[basin].ToImmutableArray()),
-        ];
-        redrawn = new RedrawnWeights(weights.Basins, weights.Cells.Gauges);
+        this.weights = weights;
+        this.rain = rain;
+        this.columns = columns;
+        owners = new BasinOwners(weights);
         distances = new BasinDistances(weights.Basins, weights.Cells.Gauges);
+        redrawn = new Lazy<ReportingWeights>(() => RedrawnWeights.Of(weights));
     }
 
-    /// <summary>Computes the values of one step.</summary>
-    /// <param name="depths">Millimetres, a value a gauge; 0 where missing.</param>
-    /// <param name="reports">True for each gauge that reports.</param>
-    /// <param name="values">Takes a value a basin.</param>
-    public void Compute(ReadOnlySpan<double> depths, ReadOnlySpan<bool> reports, Span<ArealValue> values)
+    private int Basins => weights.Basins.Basins.Length;
+
+    /// <summary>The series under one gap policy.</summary>
+    /// <exception cref="RefusedException">Basins too thin to be weighed by some set of gauges.</exception>
+    public ArealRainfall Compute(GapPolicy gaps, ReportingRule rule, StepContext context)
     {
-        for (var basin = 0; basin < full.Length; basin++)
+        var values = new ArealValue[rain.Times.Count * Basins];
+        for (var first = 0; first < rain.Times.Count; first += BlockSteps)
         {
-            values[basin] = ValueOf(basin, depths, reports);
+            context.Cancellation.ThrowIfCancellationRequested();
+            context.Progress((double)first / rain.Times.Count);
+            var count = Math.Min(BlockSteps, rain.Times.Count - first);
+            Fill(new StepBlock(rain, columns, first, count, Basins), gaps, rule, values);
         }
+
+        return new ArealRainfall(weights.Basins, rain.Times, values);
     }
 
-    private ArealValue ValueOf(int basin, ReadOnlySpan<double> depths, ReadOnlySpan<bool> reports)
+    private void Fill(StepBlock block, GapPolicy gaps, ReportingRule rule, ArealValue[] values)
     {
-        var (count, share) = Reporting(full[basin], reports);
-        var complete = count == full[basin].Length;
-        var nearest = distances.ToNearest(basin, reports);
-        var withheld =
-            !complete
-            && (
-                gaps == GapPolicy.Withhold
-                || nearest is null
-                || !reporting.IsMetBy(count, share, nearest.Value)
-                || (gaps == GapPolicy.Rescale && count == 0)
+        owners.Apply(block);
+        distances.Measure(block);
+        var statuses = new ArealStatus[block.Count * Basins];
+        for (var at = 0; at < statuses.Length; at++)
+        {
+            statuses[at] = StatusOf(block, at, gaps, rule);
+            block.Wanted[at] = gaps == GapPolicy.Redraw && statuses[at] == ArealStatus.Partial;
+        }
+
+        Redraw(block);
+        for (var at = 0; at < statuses.Length; at++)
+        {
+            values[(block.First * Basins) + at] = new ArealValue(
+                statuses[at] == ArealStatus.Withheld ? null : block.Means[at],
+                statuses[at],
+                block.Reporting[at],
+                owners.CountEstimated(block, at),
+                block.Shares[at],
+                block.Nearest[at]
             );
-        if (withheld)
-        {
-            return new ArealValue(null, ArealStatus.Withheld, count, 0, share, nearest);
         }
-
-        var depth =
-            complete ? Sum(full[basin], depths)
-            : gaps == GapPolicy.Redraw ? Sum(redrawn.Of(basin, reports), depths)
-            : Rescaled(full[basin], depths, reports);
-        return new ArealValue(
-            depth,
-            complete ? ArealStatus.Complete : ArealStatus.Partial,
-            count,
-            0,
-            complete ? 1 : share,
-            nearest
-        );
     }
 
-    private static (int Count, double Share) Reporting(ImmutableArray<Weight> weights, ReadOnlySpan<bool> reports)
+    private ArealStatus StatusOf(StepBlock block, int at, GapPolicy gaps, ReportingRule rule)
     {
-        var (count, share) = (0, default(CompensatedSum));
-        foreach (var weight in weights)
+        if (block.Reporting[at] == owners.CountOf(at % Basins))
         {
-            if (reports[weight.Gauge])
-            {
-                count++;
-                share.Add(weight.Share);
-            }
+            return ArealStatus.Complete;
         }
 
-        return (count, share.Value);
+        var given =
+            gaps != GapPolicy.Withhold
+            && block.Nearest[at] is { } nearest
+            && rule.IsMetBy(block.Reporting[at], block.Shares[at], nearest)
+            && (gaps != GapPolicy.Rescale || block.Reporting[at] > 0);
+        return given ? ArealStatus.Partial : ArealStatus.Withheld;
     }
 
-    private static double Sum(ImmutableArray<Weight> weights, ReadOnlySpan<double> depths)
+    private void Redraw(StepBlock block)
     {
-        var sum = default(CompensatedSum);
-        foreach (var weight in weights)
+        if (!block.Wanted.Contains(true))
         {
-            sum.Add(weight.Share * depths[weight.Gauge]);
+            return;
         }
 
-        return sum.Value;
-    }
-
-    private static double Rescaled(
-        ImmutableArray<Weight> weights,
-        ReadOnlySpan<double> depths,
-        ReadOnlySpan<bool> reports
-    )
-    {
-        var (sum, share) = (default(CompensatedSum), default(CompensatedSum));
-        foreach (var weight in weights)
+        try
         {
-            if (reports[weight.Gauge])
-            {
-                sum.Add(weight.Share * depths[weight.Gauge]);
-                share.Add(weight.Share);
-            }
+            redrawn.Value.Means(
+                block.Count,
+                block.Depths,
+                block.Reports,
+                block.Wanted,
+                block.Means,
+                Environment.ProcessorCount
+            );
         }
-
-        return sum.Value / share.Value;
+        catch (PolygonsRefusedException refused)
+        {
+            throw BasinWeights.Refusal(refused, weights.Basins);
+        }
     }
 }

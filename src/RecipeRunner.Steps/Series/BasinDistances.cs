@@ -7,12 +7,18 @@ internal sealed class BasinDistances(BasinLayer basins, GaugeNetwork network)
 {
     private readonly GaugeDistances?[] measured = new GaugeDistances?[basins.Basins.Length];
 
-    /// <summary>Metres from a basin, 0 inside it, to the nearest gauge that reports; null where none does.</summary>
-    /// <param name="basin">Index of the basin.</param>
-    /// <param name="reports">True for each gauge that reports.</param>
-    public double? ToNearest(int basin, ReadOnlySpan<bool> reports)
+    /// <summary>Measures every basin at every step of a block: metres, 0 inside the basin.</summary>
+    public void Measure(StepBlock block) => Parallel.For(0, measured.Length, basin => Measure(block, basin));
+
+    private void Measure(StepBlock block, int basin)
     {
-        measured[basin] ??= new GaugeDistances(basins.Basins[basin].Shape, network);
-        return measured[basin]!.ToNearest(reports);
+        var distances = measured[basin] ??= new GaugeDistances(basins.Basins[basin].Shape, network);
+        var gauges = network.Gauges.Length;
+        for (var t = 0; t < block.Count; t++)
+        {
+            block.Nearest[(t * measured.Length) + basin] = distances.ToNearest(
+                block.Reports.AsSpan(t * gauges, gauges)
+            );
+        }
     }
 }

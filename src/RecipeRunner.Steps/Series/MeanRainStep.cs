@@ -13,8 +13,11 @@ namespace RecipeRunner.Steps.Series;
 /// <param name="Weights">Weights of the full network.</param>
 /// <param name="Rain">Gauge records.</param>
 /// <param name="Gaps">What to do where a gauge is missing.</param>
-/// <param name="Reporting">The share of a basin's weight in the full network that must report.</param>
-/// <example><code>var areal = weights.MeanRain(rain, gaps: GapPolicy.Redraw, reporting: AtLeast.Percent(60));</code></example>
+/// <param name="Reporting">
+/// What must report for a basin to have a value: a share of its weight in the full network, a number of gauges, a gauge within some
+/// distance, or several of these joined with <c>&amp;</c>.
+/// </param>
+/// <example><code>var areal = weights.MeanRain(rain, gaps: GapPolicy.Redraw, reporting: AtLeast.Percent(60) &amp; Within.Kilometres(30));</code></example>
 [Step("Mean rain", Word = "rain", Source = "Thiessen 1911, doi:10.1175/1520-0493(1911)39<1082b:PAFLA>2.0.CO;2")]
 public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPolicy Gaps, ReportingRule Reporting)
     : Step<ArealRainfall>
@@ -24,46 +27,27 @@ public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPoli
     {
         var network = Weights.Cells.Gauges;
         var columns = RecordColumns.Match(context, network, Rain);
-        var calculation = new ArealCalculation(Weights, Gaps, Reporting);
-        var basins = Weights.Basins.Basins.Length;
-        var values = new ArealValue[Rain.Times.Count * basins];
-        var (depths, reports) = (new double[columns.Length], new bool[columns.Length]);
-        for (var t = 0; t < Rain.Times.Count; t++)
-        {
-            context.Cancellation.ThrowIfCancellationRequested();
-            context.Progress((double)t / Rain.Times.Count);
-            Gather(t, columns, depths, reports);
-            calculation.Compute(depths, reports, values.AsSpan(t * basins, basins));
-        }
-
-        var areal = new ArealRainfall(Weights.Basins, Rain.Times, values);
+        var areal = new ArealCalculation(Weights, Rain, columns).Compute(Gaps, Reporting, context);
         context.Assume(PolicyWords());
         context.Assume("A missing value is not zero: it is left out, as the gap policy says.");
         TellOfWithheld(context, areal);
         return areal;
     }
 
-    private void Gather(int t, int[] columns, double[] depths, bool[] reports)
-    {
-        var row = Rain.DepthsAt(t);
-        var statuses = Rain.StatusesAt(t);
-        for (var gauge = 0; gauge < columns.Length; gauge++)
-        {
-            var column = columns[gauge];
-            reports[gauge] = column >= 0 && statuses[column].Reports();
-            depths[gauge] = reports[gauge] ? row[column] : 0;
-        }
-    }
-
     private string PolicyWords() =>
         Gaps switch
         {
             GapPolicy.Redraw =>
-                $"Where a gauge is missing, cells are drawn anew from the gauges that report; {Reporting.ToSettingText()} of a basin's weight must report.",
+                $"Where a gauge is missing, cells are drawn anew from the gauges that report; {RuleWords()}",
             GapPolicy.Rescale =>
-                $"Where a gauge is missing, the weights of the others are scaled up to sum to 1; {Reporting.ToSettingText()} of a basin's weight must report.",
+                $"Where a gauge is missing, the weights of the others are scaled up to sum to 1; {RuleWords()}",
             _ => "Where a gauge with weight is missing, the value is withheld.",
         };
+
+    private string RuleWords() =>
+        Reporting == ReportingRule.Any
+            ? "any gauge that reports is enough."
+            : $"what must report for a basin to have a value: {Reporting.ToSettingText()}.";
 
     private static void TellOfWithheld(StepContext context, ArealRainfall areal)
     {
@@ -117,7 +101,7 @@ public static class MeanRainVerb
     /// <param name="weights">Weights of the full network.</param>
     /// <param name="rain">Gauge records.</param>
     /// <param name="gaps">What to do where a gauge is missing.</param>
-    /// <param name="reporting">The share of a basin's weight that must report; any share where not given.</param>
+    /// <param name="reporting">What must report for a basin to have a value; any gauge where not given.</param>
     public static ArealRainfall MeanRain(
         this WeightTable weights,
         RainRecords rain,

@@ -41,19 +41,26 @@ internal static class BasinWeights
         }
         catch (PolygonsRefusedException refused)
         {
-            var problems = new Problems();
-            foreach (var refusal in refused.Refusals)
-            {
-                problems.Add(
-                    "RR0405",
-                    new Place(layer.Source, Item: $"basin {layer.Basins[refusal.Polygon].Id}"),
-                    $"Its outline {refusal.Reason}.",
-                    "Mend the outline, then run again."
-                );
-            }
-
-            problems.ThrowIfAny();
-            throw;
+            throw Refusal(refused, layer);
         }
+    }
+
+    /// <summary>What to tell of shapes that cannot be weighed; all of them are named.</summary>
+    /// <param name="refused">The shapes.</param>
+    /// <param name="layer">The layer that holds them.</param>
+    public static RefusedException Refusal(PolygonsRefusedException refused, BasinLayer layer)
+    {
+        var problems = new Problems();
+        foreach (var refusal in refused.Refusals)
+        {
+            problems.Add(
+                "RR0405",
+                new Place(layer.Source, Item: $"basin {layer.Basins[refusal.Polygon].Id}"),
+                $"Its outline {refusal.Reason}.",
+                "Mend the outline, then run again."
+            );
+        }
+
+        return problems.ToRefusal();
     }
 }

@@ -27,8 +27,7 @@ internal static class NetworkCells
                 AddCoincidence(problems, network, [.. group.Select(site => network.Gauges[site])]);
             }
 
-            problems.ThrowIfAny();
-            throw;
+            throw problems.ToRefusal();
         }
     }
 
