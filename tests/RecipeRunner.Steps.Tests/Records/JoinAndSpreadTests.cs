@@ -120,4 +120,20 @@ public sealed class JoinAndSpreadTests : IDisposable
         later.StatusesAt(0)[0].ShouldBe(RecordStatus.Accumulated);
         bench.Study.Findings.Single().Code.ShouldBe("RR0522");
     }
+
+    [Fact]
+    public void Records_of_some_gauges_are_left_out()
+    {
+        var rain = bench.Records(Rainfall.Daily, First, ("A", "1 2"), ("B", "3 ."), ("C", "a a=9"));
+
+        var left = rain.Without("A");
+
+        left.GaugeIds.ShouldBe(["B", "C"]);
+        left.DepthsAt(0).ToArray().ShouldBe([3, 0]);
+        left.StatusesAt(1).ToArray().ShouldBe([RecordStatus.Missing, RecordStatus.Accumulated]);
+        left.Accumulations.ShouldBe([new Accumulation(1, 0, 1, 9)]);
+        bench.Study.Findings.Single().Code.ShouldBe("RR0537");
+        Bench.Refused(() => rain.Without("D")).Single().Code.ShouldBe("RR0528");
+        Bench.Refused(() => rain.Without("A", "B", "C")).Single().Code.ShouldBe("RR0529");
+    }
 }

@@ -77,6 +77,47 @@ public sealed class GapPolicyTests : IDisposable
     }
 
     [Fact]
+    public void Only_values_of_the_step_itself_report_and_estimates_are_counted()
+    {
+        var rain = bench.Records(
+            Rainfall.Daily,
+            new NodaTime.LocalDateTime(2024, 1, 1, 0, 0),
+            ("A", "10 T 10"),
+            ("B", "e10 a 10"),
+            ("C", "10 x90 10"),
+            ("D", "10 10 .")
+        );
+
+        var areal = weights.MeanRain(rain, GapPolicy.Rescale);
+
+        areal.At(0, 0).ShouldBe(new ArealValue(10, ArealStatus.Complete, 4, 1, 1, 0));
+        areal.At(1, 0).ShouldBe(new ArealValue(5, ArealStatus.Partial, 2, 0, 0.5, 0));
+    }
+
+    [Fact]
+    public void Values_are_withheld_below_a_number_of_gauges_and_beyond_a_distance()
+    {
+        var gauges = bench.Network(("A", 100, 50), ("far", 5000, 50));
+        var basin = bench.Basins(("box", Bench.Box(0, 0, 200, 100))).WeighBy(gauges.ThiessenCells());
+        var rain = bench.Records(
+            Rainfall.Daily,
+            new NodaTime.LocalDateTime(2024, 1, 1, 0, 0),
+            ("A", "."),
+            ("far", "8")
+        );
+
+        ArealStatus Under(ReportingRule rule) => basin.MeanRain(rain, GapPolicy.Redraw, rule).At(0, 0).Status;
+
+        Under(Within.Kilometres(4.8)).ShouldBe(ArealStatus.Partial);
+        Under(Within.Kilometres(4.7)).ShouldBe(ArealStatus.Withheld);
+        Under(AtLeast.Gauges(1)).ShouldBe(ArealStatus.Withheld);
+        Under(ReportingRule.Any).ShouldBe(ArealStatus.Partial);
+        Bench.Refused(() => Within.Kilometres(-1))[0].Code.ShouldBe("RR0503");
+        Bench.Refused(() => AtLeast.Gauges(0))[0].Code.ShouldBe("RR0503");
+        Bench.Refused(() => AtLeast.Steps(0))[0].Code.ShouldBe("RR0503");
+    }
+
+    [Fact]
     public void A_gauge_beyond_the_basin_stands_in_when_those_within_are_silent()
     {
         var gauges = bench.Network(("A", 100, 50), ("far", 5000, 50));
