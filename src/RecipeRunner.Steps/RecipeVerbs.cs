@@ -65,12 +65,36 @@ public sealed class RecipeVerbs
     ) => study.Run(new ReadGaugesStep(file, id, x, y, elevation, crs));
 
     /// <inheritdoc cref="ReadRecordsStep"/>
-    /// <param name="file">The file, relative to the data folder.</param>
+    /// <param name="file">The file, relative to the data folder; with * or ? in its name, all files that fit, read as one.</param>
     /// <param name="unit">The unit of the depths.</param>
     /// <param name="step">The steps of time.</param>
     /// <param name="missing">Texts that mark a missing value beside the blank cell.</param>
-    public RainRecords ReadRecords(string file, RainUnit unit, TimeStep step, IReadOnlyList<string>? missing = null) =>
-        study.Run(new ReadRecordsStep(file, unit, step, [.. missing ?? []]));
+    /// <param name="trace">Texts that mark rain too little to measure.</param>
+    /// <param name="accumulating">Texts that mark a step whose rain is in the gauge's next value.</param>
+    /// <param name="estimated">Letters after a number that mark it as estimated.</param>
+    /// <param name="form">Which columns hold what; found from the first rows where not given.</param>
+    public RainRecords ReadRecords(
+        string file,
+        RainUnit unit,
+        TimeStep step,
+        IReadOnlyList<string>? missing = null,
+        IReadOnlyList<string>? trace = null,
+        IReadOnlyList<string>? accumulating = null,
+        IReadOnlyList<string>? estimated = null,
+        RecordForm? form = null
+    ) =>
+        study.Run(
+            new ReadRecordsStep(
+                file,
+                unit,
+                step,
+                [.. missing ?? []],
+                [.. trace ?? []],
+                [.. accumulating ?? []],
+                [.. estimated ?? []],
+                form
+            )
+        );
 
     /// <inheritdoc cref="EmitLayerStep"/>
     /// <param name="layer">What to write: basins, gauges, cells, pieces, triangles.</param>

@@ -1,3 +1,5 @@
+using System.Collections.Immutable;
+using System.IO.Enumeration;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Testing;
@@ -59,6 +61,30 @@ public sealed class TrialStudy(string dataFolder) : IStudy
         public override CancellationToken Cancellation => CancellationToken.None;
 
         public override bool InputExists(string name) => File.Exists(PathOf(name));
+
+        public override ImmutableArray<string> FindInputs(string pattern)
+        {
+            var folder = Path.GetDirectoryName(pattern) ?? "";
+            var within = PathOf(folder);
+            var last = Path.GetFileName(pattern);
+            if (!last.AsSpan().ContainsAny('*', '?'))
+            {
+                return [pattern];
+            }
+
+            var names = Directory
+                .EnumerateFiles(within)
+                .Select(file => Path.GetFileName(file))
+                .Where(name => FileSystemName.MatchesSimpleExpression(last, name, ignoreCase: false))
+                .Select(name => Path.Combine(folder, name))
+                .Order(StringComparer.Ordinal)
+                .ToImmutableArray();
+            return names.IsEmpty
+                ? throw new RefusedException(
+                    Finding.Error("RR0120", new Place(pattern), "There is no such file in the data folder.")
+                )
+                : names;
+        }
 
         public override Stream OpenInput(string name) =>
             InputExists(name)

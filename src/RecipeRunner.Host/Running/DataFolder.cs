@@ -1,3 +1,5 @@
+using System.Collections.Immutable;
+using System.IO.Enumeration;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Wording;
 
@@ -32,6 +34,52 @@ public sealed class DataFolder
     /// <exception cref="RefusedException">The name leaves the folder, or there is no such file.</exception>
     public string PathOf(string name)
     {
+        RequireWithin(name);
+        return Exists(name) ? Path.Combine(path, name) : throw Missing(name);
+    }
+
+    /// <summary>The files that a name means: the one of that name, or all that fit its last part where that holds * or ?.</summary>
+    /// <param name="pattern">Relative, with forward slashes; * stands for any letters, ? for one. Case counts.</param>
+    /// <returns>Names in ordinal order, at least one. Links, folders and hidden files (<c>.name</c>) do not fit a pattern.</returns>
+    /// <exception cref="RefusedException">The name leaves the folder, or nothing fits.</exception>
+    public ImmutableArray<string> Find(string pattern)
+    {
+        RequireWithin(pattern);
+        var slash = pattern.LastIndexOf('/');
+        var (folder, last) = (pattern[..(slash + 1)], pattern[(slash + 1)..]);
+        if (folder.AsSpan().ContainsAny('*', '?'))
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0123",
+                    new Place(pattern),
+                    "Only the last part of a name may hold * or ?.",
+                    "Name the folder in full, such as rain/2024/*.csv."
+                )
+            );
+        }
+
+        if (!last.AsSpan().ContainsAny('*', '?'))
+        {
+            return [pattern];
+        }
+
+        var within = Path.Combine(path, folder);
+        var names = Directory.Exists(within)
+            ? Directory
+                .EnumerateFiles(within)
+                .Select(file => Path.GetFileName(file))
+                .Where(name => name[0] != '.' && FileSystemName.MatchesSimpleExpression(last, name, ignoreCase: false))
+                .Select(name => folder + name)
+                .Where(Exists)
+                .Order(StringComparer.Ordinal)
+                .ToImmutableArray()
+            : [];
+        return names.IsEmpty ? throw Missing(pattern) : names;
+    }
+
+    private void RequireWithin(string name)
+    {
         if (!IsWithin(name))
         {
             throw new RefusedException(
@@ -43,8 +91,6 @@ public sealed class DataFolder
                 )
             );
         }
-
-        return Exists(name) ? Path.Combine(path, name) : throw Missing(name);
     }
 
     private bool IsWithin(string name)

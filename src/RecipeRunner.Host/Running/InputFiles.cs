@@ -17,6 +17,8 @@ internal sealed class InputFiles(DataFolder data, string payload)
 
     public bool Exists(string name) => data.Exists(name);
 
+    public ImmutableArray<string> Find(string pattern) => data.Find(pattern);
+
     public Stream Open(string name, CancellationToken cancellation)
     {
         var source = data.PathOf(name);

@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using RecipeRunner.Host.Sealing;
 using RecipeRunner.Model.Steps;
 
@@ -27,6 +28,8 @@ internal sealed class RunContext(
     public List<string> FilesWritten { get; } = [];
 
     public override bool InputExists(string name) => inputs.Exists(name);
+
+    public override ImmutableArray<string> FindInputs(string pattern) => inputs.Find(pattern);
 
     public override Stream OpenInput(string name)
     {

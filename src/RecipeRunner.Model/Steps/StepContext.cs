@@ -1,3 +1,5 @@
+using System.Collections.Immutable;
+
 namespace RecipeRunner.Model.Steps;
 
 /// <summary>The only door out of a step.</summary>
@@ -9,6 +11,12 @@ public abstract class StepContext
     /// <summary>True where the data folder holds a file of this name.</summary>
     /// <param name="name">Relative to the data folder, with forward slashes.</param>
     public abstract bool InputExists(string name);
+
+    /// <summary>The files that a name means: the one of that name, or all that fit its last part where that holds * or ?.</summary>
+    /// <param name="pattern">Relative to the data folder, with forward slashes; * stands for any letters, ? for one.</param>
+    /// <returns>Names in ordinal order, at least one.</returns>
+    /// <exception cref="RefusedException">There is none, or the name lies outside the data folder.</exception>
+    public abstract ImmutableArray<string> FindInputs(string pattern);
 
     /// <summary>
     /// Opens an input file for reading and seeking. It is copied into the study and digested first; what is read is the copy.

@@ -1,4 +1,5 @@
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Steps.Reading.Texts;
 
 namespace RecipeRunner.Steps.Peeking;
 
@@ -21,7 +22,7 @@ public static class Peek
 
         var context = new PeekContext(Path.GetDirectoryName(Path.GetFullPath(path))!, cancellation);
         var name = Path.GetFileName(path);
-        var isTable = Path.GetExtension(path).ToLowerInvariant() is ".csv" or ".txt" or ".tsv";
+        var isTable = TextInput.EndingOf(name) is ".csv" or ".txt" or ".tsv";
         var lines = isTable ? TablePeek.Of(context, name) : LayerPeek.Of(context, name);
         return lines.Concat(context.Findings.Select(FindingLine));
     }

@@ -1,5 +1,5 @@
 using System.Globalization;
-using RecipeRunner.Steps.Reading;
+using RecipeRunner.Steps.Reading.Texts;
 
 namespace RecipeRunner.Steps.Peeking;
 

@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Steps.Peeking;
@@ -11,6 +12,8 @@ internal sealed class PeekContext(string folder, CancellationToken cancellation)
 
     public override bool InputExists(string name) => File.Exists(Path.Combine(folder, name));
 
+    public override ImmutableArray<string> FindInputs(string pattern) => [pattern];
+
     public override Stream OpenInput(string name) => File.OpenRead(Path.Combine(folder, name));
 
     public override Stream CreateOutput(string path) =>
@@ -18,8 +21,7 @@ internal sealed class PeekContext(string folder, CancellationToken cancellation)
 
     public override void Find(Finding finding) => Findings.Add(finding);
 
-    public override void State(string name, string value) =>
-        throw new InvalidOperationException("A look at a file keeps no journal.");
+    public override void State(string name, string value) { }
 
     public override void Assume(string sentence) =>
         throw new InvalidOperationException("A look at a file keeps no journal.");

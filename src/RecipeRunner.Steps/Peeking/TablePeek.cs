@@ -3,6 +3,8 @@ using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
 using RecipeRunner.Steps.Reading;
+using RecipeRunner.Steps.Reading.Records;
+using RecipeRunner.Steps.Reading.Texts;
 
 namespace RecipeRunner.Steps.Peeking;
 
@@ -15,10 +17,7 @@ internal static class TablePeek
         var firstRow = columns.Select(column => column.First).ToArray();
         var isRecord =
             firstRow.Length >= 2
-            && (
-                LabelReader.LooksLikeTime(firstRow[0])
-                || (firstRow.Length == 3 && LabelReader.LooksLikeTime(firstRow[1]))
-            );
+            && (LooksLikeTime(firstRow[0]) || (firstRow.Length == 3 && LooksLikeTime(firstRow[1])));
         return isRecord ? OfRecords(context, name, columns) : OfColumns(columns);
     }
 
@@ -35,7 +34,7 @@ internal static class TablePeek
 
     private static List<(string Name, string Text)> OfRecords(StepContext context, string name, PeekColumn[] columns)
     {
-        var time = LabelReader.LooksLikeTime(columns[0].First) ? columns[0] : columns[1];
+        var time = LooksLikeTime(columns[0].First) ? columns[0] : columns[1];
         var step = StepOf(time.First);
         var markers = columns
             .Where(column => column != time)
@@ -43,7 +42,9 @@ internal static class TablePeek
             .Distinct(StringComparer.Ordinal)
             .Order(StringComparer.Ordinal)
             .ToArray();
-        var records = new ReadRecordsStep(name, RainUnit.Millimetres, step, [.. markers]).Execute(context);
+        var records = new ReadRecordsStep(name, RainUnit.Millimetres, step, [.. markers], [], [], [], null).Execute(
+            context
+        );
         List<(string Name, string Text)> lines =
         [
             (
@@ -86,6 +87,9 @@ internal static class TablePeek
         return lines;
     }
 
+    private static bool LooksLikeTime(string text) =>
+        TimeText.TryRead(text, out var time) && time.Detail != TimeDetail.Year;
+
     /// <summary>Months where the label is a month, else days that end at the label's time; a date alone is taken as the day.</summary>
     private static TimeStep StepOf(string label) =>
         label.Length == "2024-01".Length ? TimeStep.Months
@@ -107,8 +111,8 @@ internal static class TablePeek
 
     private static PeekColumn[] Columns(StepContext context, string name)
     {
-        using var stream = context.OpenInput(name);
-        using var reader = CsvText.Open(stream, name);
+        using var text = TextInput.Open(context, name);
+        using var reader = CsvText.Open(text);
         var columns = CsvText.Names(reader, name).Select(column => new PeekColumn(column)).ToArray();
         foreach (var row in reader)
         {

@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using NetTopologySuite.Geometries;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Steps.Reading.Texts;
 
 namespace RecipeRunner.Steps.Reading;
 

@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using NetTopologySuite.Geometries;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Steps.Reading.Texts;
 
 namespace RecipeRunner.Steps.Reading;
 
@@ -24,8 +25,8 @@ internal sealed record GaugeRows(ImmutableArray<GaugeRow> Rows, FeatureFile? Lay
     /// <summary>Reads the rows of a text table.</summary>
     public static GaugeRows OfTable(StepContext context, ReadGaugesStep step)
     {
-        using var stream = context.OpenInput(step.File);
-        using var reader = CsvText.Open(stream, step.File);
+        using var text = TextInput.Open(context, step.File);
+        using var reader = CsvText.Open(text);
         var names = CsvText.Names(reader, step.File);
         if (step.X is null || step.Y is null)
         {

@@ -5,6 +5,7 @@ using NetTopologySuite.Geometries;
 using NetTopologySuite.IO.Converters;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Steps.Reading.Texts;
 using RecipeRunner.Steps.Referencing;
 using RecipeRunner.Steps.Shapes;
 
@@ -60,6 +61,7 @@ internal static class GeoJsonSource
     {
         using var stream = context.OpenInput(name);
         Utf8Text.Require(stream, name);
+        stream.Position = 0;
         try
         {
             return JsonDocument.Parse(stream);

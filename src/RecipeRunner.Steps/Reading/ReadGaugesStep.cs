@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Numerics.Predicates;
+using RecipeRunner.Steps.Reading.Texts;
 using RecipeRunner.Steps.Shapes;
 
 namespace RecipeRunner.Steps.Reading;
@@ -27,7 +28,7 @@ public sealed record ReadGaugesStep(
     /// <inheritdoc/>
     public override GaugeNetwork Execute(StepContext context)
     {
-        var ending = Path.GetExtension(File).ToLowerInvariant();
+        var ending = TextInput.EndingOf(File);
         var rows = ending is ".csv" or ".txt" or ".tsv"
             ? GaugeRows.OfTable(context, this)
             : GaugeRows.OfLayer(context, this);

@@ -2,30 +2,51 @@ using System.Collections.Immutable;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
+using RecipeRunner.Steps.Reading.Records;
 
 namespace RecipeRunner.Steps.Reading;
 
 /// <summary>
-/// Reads gauge records from CSV, wide (time, then a column a gauge) or long (gauge, time, value); which of the two is
-/// found from the first row. Blank cells are missing; missing is not zero.
+/// Reads gauge records from text tables: wide (time, then a column a gauge), long (gauge, time, value) or a file a gauge,
+/// plain or packed (.gz). Without a form, wide and long are found from the first rows. Blank cells are missing; missing is
+/// not zero.
 /// </summary>
-/// <param name="File">The file, relative to the data folder.</param>
+/// <param name="File">The file, relative to the data folder; with * or ? in its name, all files that fit, read as one.</param>
 /// <param name="Unit">The unit of the depths.</param>
-/// <param name="Step">The steps of time: <c>TimeStep.Days(endingAt: "09:00")</c> or <c>TimeStep.Months</c>.</param>
+/// <param name="Step">The steps of time: <c>TimeStep.Days(endingAt: "09:00")</c>, <c>TimeStep.Months</c>, <c>TimeStep.Minutes(15)</c>.</param>
 /// <param name="Missing">Texts that mark a missing value beside the blank cell, such as <c>-9999</c> or <c>NA</c>.</param>
-/// <example><code>var rain = ReadRecords("daily.csv", RainUnit.Millimetres, TimeStep.Days(endingAt: "09:00"), missing: ["-9999"]);</code></example>
+/// <param name="Trace">Texts that mark rain too little to measure, such as <c>T</c>.</param>
+/// <param name="Accumulating">Texts that mark a step whose rain is in the gauge's next value, such as <c>A</c>.</param>
+/// <param name="Estimated">Letters after a number that mark it as estimated, such as <c>E</c> in <c>12.3E</c>.</param>
+/// <param name="Form">Which columns hold what.</param>
+/// <example><code>var rain = ReadRecords("rain/*.csv.gz", RainUnit.Millimetres, TimeStep.Days(endingAt: "09:00"), missing: ["-9999"], form: RecordForm.Long(gauge: "station", time: "date", value: "prcp_mm"));</code></example>
 [Step("Read records")]
-public sealed record ReadRecordsStep(string File, RainUnit Unit, TimeStep Step, ImmutableArray<string> Missing)
-    : Step<RainRecords>
+public sealed record ReadRecordsStep(
+    string File,
+    RainUnit Unit,
+    TimeStep Step,
+    ImmutableArray<string> Missing,
+    ImmutableArray<string> Trace,
+    ImmutableArray<string> Accumulating,
+    ImmutableArray<string> Estimated,
+    RecordForm? Form
+) : Step<RainRecords>
 {
     /// <inheritdoc/>
     public override RainRecords Execute(StepContext context)
     {
-        using var stream = context.OpenInput(File);
-        using var reader = CsvText.Open(stream, File);
-        var names = CsvText.Names(reader, File);
-        var table = new RecordTable(File, Step, new DepthReader(File, Unit, Missing));
-        RecordRows.Read(reader, names, table, stream, context);
-        return table.Finish(context);
+        var marks = new RecordMarks(Missing, Trace, Accumulating, Estimated);
+        var settings = new RecordSettings(Unit, Step, marks, Form);
+        var (parts, forms) = (new List<RecordPart>(), new List<string>());
+        foreach (var name in context.FindInputs(File))
+        {
+            var (part, form) = RecordFile.Read(context, name, settings);
+            parts.Add(part);
+            forms.Add(form);
+        }
+
+        context.State("form", string.Join("; ", forms.Distinct(StringComparer.Ordinal)));
+        context.State("unit", Unit.Name);
+        return RecordAssembly.Finish(context, parts, File);
     }
 }

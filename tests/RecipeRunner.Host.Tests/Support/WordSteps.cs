@@ -32,6 +32,22 @@ public sealed record ReadWordsStep(string File) : Step<Words>
     }
 }
 
+/// <summary>Names the files that a pattern means.</summary>
+[Step("List words")]
+public sealed record ListWordsStep(string Pattern) : Step<Words>
+{
+    public override Words Execute(StepContext context)
+    {
+        var names = context.FindInputs(Pattern);
+        foreach (var name in names)
+        {
+            context.OpenInput(name).Dispose();
+        }
+
+        return new Words(string.Join(" ", names));
+    }
+}
+
 /// <summary>Joins two texts.</summary>
 [Step("Join words", Source = "Nobody 1900")]
 public sealed record JoinWordsStep(Words First, Words Second, string With, double Strength) : Step<Words>
@@ -81,6 +97,8 @@ public sealed class WordVerbs(IStudy study)
         where T : notnull => study.Setting(name, @default);
 
     public Words Read(string file) => study.Run(new ReadWordsStep(file));
+
+    public Words List(string pattern) => study.Run(new ListWordsStep(pattern));
 
     public Words Write(Words words, string path) => study.Run(new WriteWordsStep(words, path));
 

@@ -83,7 +83,7 @@ public sealed class RecordTests : IDisposable
     [InlineData("date,A,,B\n2024-01-01,1,2,3\n", "RR0244", 1, 3)]
     [InlineData("date,A,\n2024-01-01,1,2\n", "RR0241", 2, 0)]
     [InlineData("\uFEFF", "RR0201", 0, 0)]
-    [InlineData("date,A\n2024-01-01,1\n9024-01-01,1\n", "RR0259", 0, 0)]
+    [InlineData("date,A\n2024-01-01,1\n9024-01-01,1\n", "RR0259", 3, 0)]
     public void What_cannot_be_used_is_refused_at_its_place(string text, string code, int line, int column)
     {
         var problem = Bench.Refused(() => Read(text))[0];

@@ -1,6 +1,6 @@
 using System.Globalization;
 
-namespace RecipeRunner.Steps.Reading;
+namespace RecipeRunner.Steps.Reading.Texts;
 
 /// <summary>Reads numbers with a decimal point, the same on every machine.</summary>
 internal static class NumberText

@@ -1,7 +1,7 @@
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Wording;
 
-namespace RecipeRunner.Steps.Reading;
+namespace RecipeRunner.Steps.Reading.Texts;
 
 /// <summary>Finds columns by name.</summary>
 internal static class FieldNames

@@ -1,19 +1,18 @@
 using nietras.SeparatedValues;
 using RecipeRunner.Model.Steps;
 
-namespace RecipeRunner.Steps.Reading;
+namespace RecipeRunner.Steps.Reading.Texts;
 
-/// <summary>Opens a text table (RFC 4180; comma, semicolon, tab or bar, found from the header) and checks that it is UTF-8.</summary>
+/// <summary>Opens a text table (RFC 4180; comma, semicolon, tab or bar, found from its first row).</summary>
 internal static class CsvText
 {
-    /// <summary>Opens the table before its header, which is line 1.</summary>
-    /// <exception cref="RefusedException">It is empty, or not UTF-8.</exception>
-    public static SepReader Open(Stream stream, string name)
+    /// <summary>Opens the table before its first row.</summary>
+    /// <exception cref="RefusedException">It is empty.</exception>
+    public static SepReader Open(TextInput text)
     {
-        Utf8Text.Require(stream, name);
-        if (stream.Length == 0)
+        if (text.Lines == 0)
         {
-            throw Empty(name);
+            throw Empty(text.Name);
         }
 
         return Sep.Reader(options =>
@@ -25,7 +24,7 @@ internal static class CsvText
                     DisableFastFloat = true,
                 }
             )
-            .From(stream);
+            .From(text.Start());
     }
 
     /// <summary>Reads the header: column names without the blanks around them; nameless columns at the
@@ -38,8 +37,22 @@ internal static class CsvText
             throw Empty(name);
         }
 
-        var names = reader.Current[..].ToStringsArray().Select(column => column.Trim()).ToArray();
-        names = names[..(Array.FindLastIndex(names, column => column.Length > 0) + 1)];
+        var names = Cells(reader.Current);
+        RequireDistinct(names, name);
+        return names;
+    }
+
+    /// <summary>The cells of a row without the blanks around them; empty cells at the end are not counted.</summary>
+    public static string[] Cells(SepReader.Row row)
+    {
+        var cells = row[..].ToStringsArray().Select(column => column.Trim()).ToArray();
+        return cells[..(Array.FindLastIndex(cells, column => column.Length > 0) + 1)];
+    }
+
+    /// <summary>Refuses a header that names two columns alike.</summary>
+    /// <exception cref="RefusedException">Two columns have one name.</exception>
+    public static void RequireDistinct(string[] names, string name)
+    {
         var twins = names
             .Where(column => column.Length > 0)
             .GroupBy(column => column, StringComparer.Ordinal)
@@ -57,7 +70,6 @@ internal static class CsvText
         }
 
         problems.ThrowIfAny();
-        return names;
     }
 
     /// <summary>True for an empty line, which says nothing.</summary>
@@ -77,7 +89,8 @@ internal static class CsvText
         return row.ColCount >= columns;
     }
 
-    private static RefusedException Empty(string name) =>
+    /// <summary>The refusal of a table without a row.</summary>
+    public static RefusedException Empty(string name) =>
         new(
             Finding.Error(
                 "RR0201",
