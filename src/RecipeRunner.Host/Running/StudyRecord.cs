@@ -48,9 +48,9 @@ public sealed record StudyRecord
     public ImmutableArray<string> Assumptions =>
         [.. Journal.SelectMany(entry => entry.Assumptions).Distinct(StringComparer.Ordinal)];
 
-    /// <summary>Findings of all steps, worst first, within a severity in the order of the steps.</summary>
+    /// <summary>Findings of all steps, each said once, worst first, within a severity in the order of the steps.</summary>
     public ImmutableArray<Finding> Findings =>
-        [.. Journal.SelectMany(entry => entry.Findings).OrderByDescending(finding => finding.Severity)];
+        [.. Journal.SelectMany(entry => entry.Findings).Distinct().OrderByDescending(finding => finding.Severity)];
 
     /// <summary>The weights that the first areal rainfall rests on, or else the first that were made; null where there are none.</summary>
     public WeightTable? MainWeights

@@ -51,6 +51,15 @@ public sealed class JournalTests : IDisposable
     }
 
     [Fact]
+    public void What_several_steps_find_alike_is_said_once()
+    {
+        var record = bench.Run(Recipe + "a.Join(b, with: \"-\", strength: 1);\n").Record;
+
+        record.Findings.Select(finding => finding.Code).ShouldBe(["XX0002"]);
+        record.Journal.Sum(entry => entry.Findings.Length).ShouldBe(2);
+    }
+
+    [Fact]
     public void Steps_run_one_after_the_other()
     {
         const string Together =
