@@ -53,21 +53,21 @@ public sealed record StudyRecord
         [.. Journal.SelectMany(entry => entry.Findings).Distinct().OrderByDescending(finding => finding.Severity)];
 
     /// <summary>The weights that the first areal rainfall rests on, or else the first that were made; null where there are none.</summary>
-    public WeightTable? MainWeights
-    {
-        get
-        {
-            var used = Journal
-                .FirstOrDefault(entry => entry.Output is ArealRainfall)
-                ?.Inputs.Select(input => Journal[input.Entry - 1].Output)
-                .OfType<WeightTable>()
-                .FirstOrDefault();
-            return used ?? Results<WeightTable>().FirstOrDefault();
-        }
-    }
+    public WeightTable? MainWeights => BehindRain<WeightTable>() ?? Results<WeightTable>().FirstOrDefault();
+
+    /// <summary>The records that the first areal rainfall rests on, or else the last that were made; null where there are none.</summary>
+    public RainRecords? MainRecords => BehindRain<RainRecords>() ?? Results<RainRecords>().LastOrDefault();
 
     /// <summary>The results of the steps that are of one kind, in order.</summary>
     /// <typeparam name="T">The kind of artifact.</typeparam>
     public IEnumerable<T> Results<T>()
         where T : Artifact => Journal.Select(entry => entry.Output).OfType<T>();
+
+    private T? BehindRain<T>()
+        where T : Artifact =>
+        Journal
+            .FirstOrDefault(entry => entry.Output is ArealRainfall)
+            ?.Inputs.Select(input => Journal[input.Entry - 1].Output)
+            .OfType<T>()
+            .FirstOrDefault();
 }

@@ -47,7 +47,7 @@ internal static class ResultSections
         page.Element("h2", "Basins");
         var basins = areal.Basins.Basins;
         page.Table(
-            $"Mean areal rainfall, {areal.Times.Count.ToString("N0", CultureInfo.InvariantCulture)} {areal.Times.Step.ToSettingText()} from {areal.Times}",
+            $"Mean areal rainfall, {areal.Times.Count.ToString("N0", CultureInfo.InvariantCulture)} {areal.Times.Step.ToSettingText()} from {areal.Times}. {from}",
             [
                 "basin",
                 "name",
@@ -128,13 +128,17 @@ internal static class ResultSections
         page.Element("h2", shown.Heading);
         page.Table(
             from,
-            [.. table.Columns.Select(column => column.Kind == ColumnKind.Text ? column.Name : ">" + column.Name)],
+            [.. table.Columns.Select(HeadingOf)],
             Enumerable
                 .Range(0, Math.Min(table.RowCount, MostRows))
                 .Select(row => (string[])[.. table.Columns.Select(column => CellOf(column, row))])
         );
         TellOfRest(page, table.RowCount - MostRows, "rows");
     }
+
+    /// <summary>The column's name, in words that a narrow page can break.</summary>
+    private static string HeadingOf(Column column) =>
+        (column.Kind == ColumnKind.Text ? "" : ">") + column.Name.Replace('_', ' ');
 
     private static string CellOf(Column column, int row) =>
         column.Kind == ColumnKind.Text ? column.Texts[row]

@@ -22,7 +22,7 @@ public static class StudyFacts
             yield return ("gauges", Gauges(weights));
         }
 
-        if (record.Results<RainRecords>().LastOrDefault() is { } rain)
+        if (record.MainRecords is { } rain)
         {
             yield return ("values", rain.StatusWords());
         }

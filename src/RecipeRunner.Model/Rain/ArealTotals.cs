@@ -11,7 +11,15 @@ namespace RecipeRunner.Model.Rain;
 /// <param name="DepthMillimetres">The sum of the steps that have a value; null where too few have one.</param>
 /// <param name="StepsWithValue">Steps that have a value.</param>
 /// <param name="StepsExpected">Steps that the period has by the calendar.</param>
-public readonly record struct ArealTotal(double? DepthMillimetres, int StepsWithValue, int StepsExpected);
+/// <param name="LeastGaugesReporting">The least number of gauges with weight that reported at a step that has a value; 0 where none has.</param>
+/// <param name="MeanWeightReporting">The mean share of the basin's weight that reported at those steps, 0 to 1; 0 where none has.</param>
+public readonly record struct ArealTotal(
+    double? DepthMillimetres,
+    int StepsWithValue,
+    int StepsExpected,
+    int LeastGaugesReporting,
+    double MeanWeightReporting
+);
 
 /// <summary>Totals of areal rainfall of basins over periods.</summary>
 public sealed class ArealTotals : Artifact, ITabular
@@ -90,6 +98,8 @@ public sealed class ArealTotals : Artifact, ITabular
             writer.Write(total.DepthMillimetres);
             writer.Write(total.StepsWithValue);
             writer.Write(total.StepsExpected);
+            writer.Write(total.LeastGaugesReporting);
+            writer.Write(total.MeanWeightReporting);
         }
     }
 }

@@ -14,7 +14,7 @@ public sealed class CompletenessTable : Artifact, ITabular
     /// <summary>The totals.</summary>
     public ArealTotals Totals { get; }
 
-    /// <summary>Columns <c>basin, period, steps_with_value, steps_expected, total_mm</c>.</summary>
+    /// <summary>Columns <c>basin, period, steps_with_value, steps_expected, gauges_least, weight_mean, total_mm</c>.</summary>
     public Table ToTable()
     {
         var basins = Totals.Basins.Basins;
@@ -42,6 +42,19 @@ public sealed class CompletenessTable : Artifact, ITabular
                 "",
                 "Steps that the period has by the calendar",
                 rows.Select(row => row.Total.StepsExpected)
+            ),
+            Column.OfCounts(
+                "gauges_least",
+                "",
+                "The least number of gauges with weight that reported at a step that has a value",
+                rows.Select(row => row.Total.LeastGaugesReporting)
+            ),
+            Column.OfNumbers(
+                "weight_mean",
+                "",
+                12,
+                "The mean share of the basin's weight in the full network that reported at those steps",
+                rows.Select(row => (double?)row.Total.MeanWeightReporting)
             ),
             Column.OfNumbers(
                 "total_mm",

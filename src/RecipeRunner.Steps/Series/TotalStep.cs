@@ -34,19 +34,27 @@ public sealed record TotalStep(ArealRainfall Areal, Every Period, ICompletenessR
 
     private ArealTotal TotalOf(int basin, StepsOfPeriod period)
     {
-        var sum = default(CompensatedSum);
-        var present = 0;
+        var (sum, weight) = (default(CompensatedSum), default(CompensatedSum));
+        var (present, gauges) = (0, int.MaxValue);
         for (var t = period.FirstStep; t < period.FirstStep + period.Count; t++)
         {
-            if (Areal.At(t, basin).DepthMillimetres is { } depth)
+            var value = Areal.At(t, basin);
+            if (value.DepthMillimetres is { } depth)
             {
                 sum.Add(depth);
+                weight.Add(value.WeightReporting);
+                gauges = Math.Min(gauges, value.GaugesReporting);
                 present++;
             }
         }
 
-        var enough = present > 0 && Complete.IsMetBy(present, period.Expected);
-        return new ArealTotal(enough ? sum.Value : null, present, period.Expected);
+        if (present == 0)
+        {
+            return new ArealTotal(null, 0, period.Expected, 0, 0);
+        }
+
+        var enough = Complete.IsMetBy(present, period.Expected);
+        return new ArealTotal(enough ? sum.Value : null, present, period.Expected, gauges, weight.Value / present);
     }
 
     private void TellOfShortSums(StepContext context, ArealTotals totals)

@@ -21,8 +21,8 @@ public sealed class TotalTests : IDisposable
         var totals = Areal(new LocalDate(2024, 1, 1), 60, _ => 1).Total(Every.Month);
 
         totals.Starts.Select(totals.Period.NameOf).ShouldBe(["2024-01", "2024-02"]);
-        totals.At(0, 0).ShouldBe(new ArealTotal(31, 31, 31));
-        totals.At(1, 0).ShouldBe(new ArealTotal(29, 29, 29));
+        totals.At(0, 0).ShouldBe(new ArealTotal(31, 31, 31, 1, 1));
+        totals.At(1, 0).ShouldBe(new ArealTotal(29, 29, 29, 1, 1));
     }
 
     [Fact]
@@ -32,8 +32,8 @@ public sealed class TotalTests : IDisposable
 
         totals.Starts.ShouldBe([new LocalDate(2022, 10, 1), new LocalDate(2023, 10, 1)]);
         totals.Starts.Select(totals.Period.NameOf).ShouldBe(["2023", "2024"]);
-        totals.At(0, 0).ShouldBe(new ArealTotal(730, 365, 365));
-        totals.At(1, 0).ShouldBe(new ArealTotal(732, 366, 366));
+        totals.At(0, 0).ShouldBe(new ArealTotal(730, 365, 365, 1, 1));
+        totals.At(1, 0).ShouldBe(new ArealTotal(732, 366, 366, 1, 1));
     }
 
     [Fact]
@@ -41,8 +41,8 @@ public sealed class TotalTests : IDisposable
     {
         var areal = Areal(new LocalDate(2024, 1, 1), 60, day => day == 10 ? null : 1);
 
-        areal.Total(Every.Month).At(0, 0).ShouldBe(new ArealTotal(null, 30, 31));
-        areal.Total(Every.Month, AtLeast.Percent(90)).At(0, 0).ShouldBe(new ArealTotal(30, 30, 31));
+        areal.Total(Every.Month).At(0, 0).ShouldBe(new ArealTotal(null, 30, 31, 1, 1));
+        areal.Total(Every.Month, AtLeast.Percent(90)).At(0, 0).ShouldBe(new ArealTotal(30, 30, 31, 1, 1));
         bench.Study.Findings.Single(finding => finding.Code == "RR0505").What.ShouldContain("box 2024-01 (30 of 31)");
         bench.Study.Findings.First(finding => finding.Code == "RR0506").What.ShouldContain("box 2024-01 (30 of 31)");
         areal.Total(Every.Month).Completeness().ToTable().Columns[2].Numbers.ShouldBe([30, 29]);
@@ -51,9 +51,58 @@ public sealed class TotalTests : IDisposable
     [Fact]
     public void A_period_cut_by_the_records_end_counts_the_steps_that_are_not_there()
     {
-        Areal(new LocalDate(2024, 1, 1), 40, _ => 1).Total(Every.Month).At(1, 0).ShouldBe(new ArealTotal(null, 9, 29));
-        Areal(new LocalDate(2024, 1, 1), 40, _ => 1).Total().At(0, 0).ShouldBe(new ArealTotal(40, 40, 40));
+        Areal(new LocalDate(2024, 1, 1), 40, _ => 1)
+            .Total(Every.Month)
+            .At(1, 0)
+            .ShouldBe(new ArealTotal(null, 9, 29, 1, 1));
+        Areal(new LocalDate(2024, 1, 1), 40, _ => 1).Total().At(0, 0).ShouldBe(new ArealTotal(40, 40, 40, 1, 1));
         Areal(new LocalDate(2024, 1, 1), 40, _ => 1).Total(Every.CalendarYear).At(0, 0).StepsExpected.ShouldBe(366);
+    }
+
+    [Fact]
+    public void Seasons_run_over_the_turn_of_the_year()
+    {
+        var totals = Areal(new LocalDate(2023, 12, 1), 183, _ => 1).Total(Every.Season);
+
+        totals.Starts.Select(totals.Period.NameOf).ShouldBe(["2024-DJF", "2024-MAM"]);
+        Enumerable.Range(0, 2).Select(p => totals.At(p, 0).DepthMillimetres).ShouldBe([91, 92]);
+    }
+
+    [Fact]
+    public void Hours_belong_to_the_month_in_which_they_began()
+    {
+        var hours = bench.Records(TimeStep.Hours(12), new LocalDateTime(2024, 1, 30, 12, 0), ("A", "1 2 4 8 16 32"));
+        var totals = bench
+            .Basins(("box", Bench.Box(0, 0, 100, 100)))
+            .WeighBy(bench.Network(("A", 50, 50)).ThiessenCells())
+            .MeanRain(hours, GapPolicy.Redraw)
+            .Total(Every.Month, AtLeast.Percent(0));
+
+        totals.At(0, 0).ShouldBe(new ArealTotal(15, 4, 62, 1, 1));
+        totals.At(1, 0).ShouldBe(new ArealTotal(48, 2, 58, 1, 1));
+        Bench
+            .Refused(() =>
+                bench
+                    .Basins(("box", Bench.Box(0, 0, 100, 100)))
+                    .WeighBy(bench.Network(("A", 50, 50)).ThiessenCells())
+                    .MeanRain(hours.ToMonths(AtLeast.Steps(1)).ToWaterYears(10, AtLeast.Steps(1)), GapPolicy.Redraw)
+                    .Total(Every.CalendarYear)
+            )[0]
+            .Code.ShouldBe("RR0523");
+    }
+
+    [Fact]
+    public void A_total_says_what_reported_behind_it()
+    {
+        // By hand: two gauges of equal weight; both report on the first day, one on the second, none on the third.
+        var rain = bench.Records(Rainfall.Daily, new LocalDateTime(2024, 1, 1, 0, 0), ("A", "1 2 ."), ("B", "3 . ."));
+        var total = bench
+            .Basins(("box", Bench.Box(0, 0, 100, 100)))
+            .WeighBy(bench.Network(("A", 0, 50), ("B", 100, 50)).ThiessenCells())
+            .MeanRain(rain, GapPolicy.Redraw)
+            .Total(complete: AtLeast.Steps(2));
+
+        total.At(0, 0).ShouldBe(new ArealTotal(4, 2, 3, 1, 0.75));
     }
 
     [Fact]
