@@ -41,6 +41,8 @@ foreach (var gaps in new[] { GapPolicy.Redraw, GapPolicy.Rescale, GapPolicy.With
 // From here on Redraw: every day has the cells of those gauges that reported on it.
 var areal = weights.MeanRain(rain, GapPolicy.Redraw, reporting: enough);
 EmitLayer(basins.With(areal.Total(complete: AtLeast.Percent(95))), "basins");
+EmitLayer(gauges, "gauges");
+EmitTable(areal, "areal-rainfall");
 EmitTable(areal.Total(Every.Season, complete: AtLeast.Percent(90)), "seasons");
 EmitTable(areal.Total(waterYear, complete: AtLeast.Percent(95)).Completeness(), "water-years-completeness");
 
