@@ -95,12 +95,22 @@ public sealed class VerbCatalogue
             return [];
         }
 
-        var values = type.GetProperties(Declared | BindingFlags.Static)
-            .Where(property => property.PropertyType == type)
-            .Select(property => $"{type.Name}.{property.Name}");
-        var makers = type.GetMethods(Declared | BindingFlags.Static)
-            .Where(method => method.ReturnType == type && !method.IsSpecialName)
-            .Select(method => $"{type.Name}.{method.Name}(…)");
-        return [.. values.Concat(makers)];
+        var makers = type.Assembly.GetExportedTypes().OrderBy(maker => maker.Name, StringComparer.Ordinal);
+        return [.. makers.SelectMany(maker => ValuesOf(maker, type))];
+    }
+
+    /// <summary>The public ways in which one type gives values of another.</summary>
+    private static IEnumerable<string> ValuesOf(Type maker, Type type)
+    {
+        var values = maker
+            .GetProperties(Declared | BindingFlags.Static)
+            .Where(property => property.PropertyType.IsAssignableTo(type))
+            .Select(property => $"{maker.Name}.{property.Name}");
+        var methods = maker
+            .GetMethods(Declared | BindingFlags.Static)
+            .Where(method => method.ReturnType.IsAssignableTo(type) && !method.IsSpecialName)
+            .Select(method => $"{maker.Name}.{method.Name}(…)")
+            .Distinct(StringComparer.Ordinal);
+        return values.Concat(methods);
     }
 }

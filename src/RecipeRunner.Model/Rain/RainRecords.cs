@@ -125,7 +125,7 @@ public sealed class RainRecords : Artifact
         var silent = statuses.Length == 0 ? 0 : 100.0 * SilentCount / statuses.Length;
         return string.Create(
             CultureInfo.InvariantCulture,
-            $"{GaugeIds.Length:N0} gauges, {Times.Count:N0} {Times.Step.ToSettingText()}, {silent:0.0} % without a value"
+            $"{GaugeIds.Length:N0} gauge{(GaugeIds.Length == 1 ? "" : "s")}, {Times.Count:N0} {Times.Step.ToSettingText()}, {silent:0.0} % without a value"
         );
     }
 

@@ -75,7 +75,7 @@ public sealed record ToLongerStepsStep(RainRecords Rain, TimeStep To, ICompleten
 /// <summary>The verbs for <see cref="ToLongerStepsStep"/>.</summary>
 public static class ToLongerStepsVerbs
 {
-    /// <summary>Sums records of minutes or hours over longer hours. <inheritdoc cref="ToLongerStepsStep"/></summary>
+    /// <summary>Sums records of minutes or hours over longer hours.</summary>
     /// <param name="rain">Gauge records.</param>
     /// <param name="hours">1, 2, 3, 4, 6, 8 or 12.</param>
     /// <param name="complete">How many of the shorter steps must have a value; all of them where not given.</param>

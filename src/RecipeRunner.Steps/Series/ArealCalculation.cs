@@ -81,17 +81,15 @@ internal sealed class ArealCalculation
 
     private ArealStatus StatusOf(StepBlock block, int at, GapPolicy gaps, ReportingRule rule)
     {
-        if (block.Reporting[at] == owners.CountOf(at % Basins))
+        var reporting = block.Reporting[at];
+        if (block.Nearest[at] is not { } nearest || !rule.IsMetBy(reporting, block.Shares[at], nearest))
         {
-            return ArealStatus.Complete;
+            return ArealStatus.Withheld;
         }
 
-        var given =
-            gaps != GapPolicy.Withhold
-            && block.Nearest[at] is { } nearest
-            && rule.IsMetBy(block.Reporting[at], block.Shares[at], nearest)
-            && (gaps != GapPolicy.Rescale || block.Reporting[at] > 0);
-        return given ? ArealStatus.Partial : ArealStatus.Withheld;
+        return reporting == owners.CountOf(at % Basins) ? ArealStatus.Complete
+            : gaps == GapPolicy.Redraw || (gaps == GapPolicy.Rescale && reporting > 0) ? ArealStatus.Partial
+            : ArealStatus.Withheld;
     }
 
     private void Redraw(StepBlock block)

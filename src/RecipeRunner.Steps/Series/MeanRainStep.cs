@@ -69,7 +69,7 @@ public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPoli
                     "RR0513",
                     Place.Of("areal rainfall"),
                     $"Every value is withheld for {Listing.Of(always)}.",
-                    "Too few gauges report; see the coverage table."
+                    "Too few gauges report, or what the recipe asks to report never does there; see the coverage table."
                 )
             );
         }

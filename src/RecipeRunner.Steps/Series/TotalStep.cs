@@ -13,7 +13,7 @@ namespace RecipeRunner.Steps.Series;
 /// </summary>
 /// <param name="Areal">Mean areal rainfall.</param>
 /// <param name="Period">What to sum over: <c>Every.Month</c>, <c>Every.WaterYear(firstMonth: 10)</c>…</param>
-/// <param name="Complete">The share of expected steps that must have a value; all of them where not given.</param>
+/// <param name="Complete">How many of the expected steps must have a value; all of them where not given.</param>
 /// <example><code>var yearly = areal.Total(Every.WaterYear(firstMonth: 10), complete: AtLeast.Percent(95));</code></example>
 [Step("Total", Word = "total")]
 public sealed record TotalStep(ArealRainfall Areal, Every Period, ICompletenessRule Complete) : Step<ArealTotals>
@@ -110,7 +110,7 @@ public static class TotalVerb
     /// <inheritdoc cref="TotalStep"/>
     /// <param name="areal">Mean areal rainfall.</param>
     /// <param name="period">What to sum over; the whole record where not given.</param>
-    /// <param name="complete">The share of expected steps that must have a value; all of them where not given.</param>
+    /// <param name="complete">How many of the expected steps must have a value; all of them where not given.</param>
     public static ArealTotals Total(
         this ArealRainfall areal,
         Every? period = null,

@@ -200,6 +200,13 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
                     "MeanRain",
                     "Total",
                     "Coverage",
+                    "ComparePolicies",
+                    "Storms",
+                    "AnnualMaxima",
+                    "DepthArea",
+                    "ToDays",
+                    "SpreadAccumulations",
+                    "And",
                     "With",
                     "EmitLayer",
                     "EmitTable",
@@ -215,6 +222,7 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
 
         var one = tool.Run("steps", "meanrain");
         one.Output.ShouldContain("GapPolicy.Redraw");
+        one.Output.ShouldContain("AtLeast.Gauges(…)");
         one.Output.ShouldContain("var areal = weights.MeanRain(");
         tool.Run("steps", "MeanRian").Errors.ShouldContain("Did you mean MeanRain?");
     }

@@ -112,6 +112,9 @@ public sealed class GapPolicyTests : IDisposable
         Under(Within.Kilometres(4.7)).ShouldBe(ArealStatus.Withheld);
         Under(AtLeast.Gauges(1)).ShouldBe(ArealStatus.Withheld);
         Under(ReportingRule.Any).ShouldBe(ArealStatus.Partial);
+        rain = bench.Records(Rainfall.Daily, new NodaTime.LocalDateTime(2024, 1, 1, 0, 0), ("A", "5"), ("far", "8"));
+        Under(AtLeast.Gauges(1)).ShouldBe(ArealStatus.Complete);
+        Under(AtLeast.Gauges(2)).ShouldBe(ArealStatus.Withheld, "one gauge has all the weight, and two are asked for");
         Bench.Refused(() => Within.Kilometres(-1))[0].Code.ShouldBe("RR0503");
         Bench.Refused(() => AtLeast.Gauges(0))[0].Code.ShouldBe("RR0503");
         Bench.Refused(() => AtLeast.Steps(0))[0].Code.ShouldBe("RR0503");
