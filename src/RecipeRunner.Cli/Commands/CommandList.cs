@@ -25,6 +25,12 @@ internal static class CommandList
             .WithDescription("Compile a recipe without running it, and report every problem.")
             .WithExample("check", "recipes/monthly-totals.csx");
         config
+            .AddCommand<RerunCommand>("rerun")
+            .WithDescription(
+                "Check a study's seal, run its recipe again on its own data, and compare. Exit code 0 identical, 4 same values, 5 differs, 6 cannot rerun."
+            )
+            .WithExample("rerun", "monthly-totals.study");
+        config
             .AddCommand<StepsCommand>("steps")
             .WithDescription("List what a recipe can say, or show one verb or step with an example.")
             .WithExample("steps", "MeanRain");

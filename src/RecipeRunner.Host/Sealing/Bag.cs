@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using System.Text;
 
 namespace RecipeRunner.Host.Sealing;
@@ -5,26 +6,36 @@ namespace RecipeRunner.Host.Sealing;
 /// <summary>Seals a folder as a bag: BagIt 1.0 (RFC 8493), payload in <c>data</c>, SHA-256 manifests.</summary>
 internal static class Bag
 {
+    /// <summary>What <c>bagit.txt</c> says, whole.</summary>
+    public const string Declaration = "BagIt-Version: 1.0\nTag-File-Character-Encoding: UTF-8\n";
+
+    /// <summary>The tag files that the tag manifest lists, in its order.</summary>
+    public static readonly ImmutableArray<string> TagFiles = ["bag-info.txt", "bagit.txt", "manifest-sha256.txt"];
+
     private static readonly UTF8Encoding Utf8 = new(encoderShouldEmitUTF8Identifier: false);
 
     /// <summary>Writes the bag's own files around the payload that is there.</summary>
     /// <returns>The number of files in the bag.</returns>
     public static int Seal(string folder, string title, CancellationToken cancellation)
     {
-        Write(folder, "bagit.txt", "BagIt-Version: 1.0\nTag-File-Character-Encoding: UTF-8\n");
+        Write(folder, "bagit.txt", Declaration);
         Write(
             folder,
             "bag-info.txt",
             $"External-Description: {Plain(title)}\nBag-Software-Agent: Recipe Runner {ToolVersion.Text}\n"
         );
-        var payload = FileDigest.PathsBelow(Path.Combine(folder, "data")).Select(path => "data/" + path).ToArray();
+        var payload = Payload(folder);
         Write(folder, "manifest-sha256.txt", Manifest(folder, payload, cancellation));
-        string[] tags = ["bag-info.txt", "bagit.txt", "manifest-sha256.txt"];
-        Write(folder, "tagmanifest-sha256.txt", Manifest(folder, tags, cancellation));
-        return payload.Length + tags.Length + 1;
+        Write(folder, "tagmanifest-sha256.txt", Manifest(folder, TagFiles, cancellation));
+        return payload.Length + TagFiles.Length + 1;
     }
 
-    private static string Manifest(string folder, IEnumerable<string> paths, CancellationToken cancellation)
+    /// <summary>The payload files of a bag, in ordinal order.</summary>
+    public static string[] Payload(string folder) =>
+        [.. FileDigest.PathsBelow(Path.Combine(folder, "data")).Select(path => "data/" + path)];
+
+    /// <summary>The lines of a manifest of files, as the seal writes them.</summary>
+    public static string Manifest(string folder, IEnumerable<string> paths, CancellationToken cancellation)
     {
         var lines = new StringBuilder();
         foreach (var path in paths)
