@@ -20,6 +20,8 @@ internal static class Gaps
         var random = GapRecord.Random(Gauges, 10_000, 0.05);
         Anew("60 basins × 10,000 steps, 5 % missing", folder, basins, random, 5);
         Anew("6 large basins × 10,000 steps, 5 % missing", folder, large, random, 5);
+        Anew("60 basins × 36,500 steps, century", folder, basins, GapRecord.Century(Gauges, 36_500), 3);
+        Anew("60 basins × 500 steps, 50 % missing", folder, basins, GapRecord.Random(Gauges, 500, 0.5), 3);
         Fixed(folder, basins, GapRecord.Random(Gauges, 10_000, 0));
     }
 

@@ -14,7 +14,8 @@ namespace RecipeRunner.Numerics.Gaps;
 /// <remarks>
 /// Weights are those that <see cref="AreaWeights"/> finds for the reporting sites alone, within 1e-12, for polygons that are
 /// not too thin for the digits of their coordinates. The same bits for any number of threads, any budget, any order of the
-/// steps and of the sites. Method: <see cref="Estate"/>, <see cref="Succession"/>.
+/// steps and of the sites. Made for outages and closures, which last or are few: where half of the sites are silent by chance
+/// anew at every step, drawing the cells anew is faster. Method: <see cref="Estate"/>, <see cref="Succession"/>.
 /// </remarks>
 public sealed class ReportingWeights
 {
@@ -133,7 +134,7 @@ public sealed class ReportingWeights
         CheckSilence(steps, reports, wanted);
         var block = new StepBlock(siteCount, polygons.Length, depths, reports, wanted, means);
         var refusals = new PolygonRefusal?[polygons.Length];
-        int groups = Math.Min(polygons.Length, GroupsPerThread * threads);
+        int groups = (int)Math.Min(polygons.Length, (long)GroupsPerThread * threads);
         Parallel.For(
             0,
             groups,
