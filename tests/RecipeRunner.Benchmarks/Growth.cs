@@ -12,7 +12,7 @@ internal static class Growth
 
     public static void Print()
     {
-        Console.Out.Write("\n| how cost grows, one thread | 1,000 | 10,000 | 100,000 | 1,000,000 | exponent |\n");
+        Console.Out.Write("\n| how cost grows, one thread | | | | | exponent |\n");
         Console.Out.Write("|---|---|---|---|---|---|\n");
         Region[] regions = [.. Sizes.Select(size => new Region(size, size / 10, 100))];
         DelaunayTriangulation[] triangulations = [.. regions.Select(Triangulate)];
@@ -27,26 +27,35 @@ internal static class Growth
 
     private static DelaunayTriangulation Triangulate(Region region) => DelaunayTriangulation.Of(region.X, region.Y);
 
-    private static void Row(string name, Func<int, double> work)
+    /// <summary>Prints a row of sizes and milliseconds, and the exponent.</summary>
+    public static void Row(string name, double[] sizes, double[] milliseconds)
     {
-        double[] medians =
-        [
-            .. Sizes.Select(
-                (size, i) =>
-                    Contest.Median([
-                        .. Enumerable
-                            .Range(0, size > 100_000 ? 5 : 21)
-                            .Select(_ => Sample.Of(() => work(i)).Milliseconds),
-                    ])
-            ),
-        ];
         string cells = string.Join(
             " | ",
-            medians.Select(ms => ms.ToString("F2", CultureInfo.InvariantCulture) + " ms")
+            sizes.Zip(milliseconds, (size, ms) => string.Create(CultureInfo.InvariantCulture, $"{size:N0}: {ms:F2} ms"))
         );
-        double exponent = Slope([.. Sizes.Select(size => Math.Log(size))], [.. medians.Select(ms => Math.Log(ms))]);
+        double exponent = Slope(
+            [.. sizes.Select(size => Math.Log(size))],
+            [.. milliseconds.Select(ms => Math.Log(ms))]
+        );
         Console.Out.Write(string.Create(CultureInfo.InvariantCulture, $"| {name} | {cells} | {exponent:F2} |\n"));
     }
+
+    private static void Row(string name, Func<int, double> work) =>
+        Row(
+            name,
+            [.. Sizes.Select(size => (double)size)],
+            [
+                .. Sizes.Select(
+                    (size, i) =>
+                        Contest.Median([
+                            .. Enumerable
+                                .Range(0, size > 100_000 ? 5 : 21)
+                                .Select(_ => Sample.Of(() => work(i)).Milliseconds),
+                        ])
+                ),
+            ]
+        );
 
     private static double Slope(double[] x, double[] y)
     {

@@ -4,15 +4,33 @@ using RecipeRunner.Numerics.Cells;
 using RecipeRunner.Numerics.Triangulation;
 using RecipeRunner.Numerics.Weights;
 
-string folder = args.Length > 0 ? args[0] : throw new ArgumentException("start it by run.sh");
-Console.Out.Write($"{Environment.ProcessorCount} processors, .NET {Environment.Version}\n\n");
-Console.Out.Write("| work | baseline | median | tool | median | tool / baseline | times faster |\n");
-Console.Out.Write("|---|---|---|---|---|---|---|\n");
-Triangulate(100_000, 21, withQhull: true);
-Triangulate(1_000_000, 9, withQhull: false);
-Weigh(6_000, 3_000, 5, withNts: true);
-Weigh(100_000, 20_000, 2, withNts: false);
-Growth.Print();
+string folder = args.Length == 2 ? args[0] : throw new ArgumentException("start it by run.sh");
+switch (args[1])
+{
+    case "cells":
+        PrintHead();
+        Triangulate(100_000, 21, withQhull: true);
+        Triangulate(1_000_000, 9, withQhull: false);
+        Weigh(6_000, 3_000, 5, withNts: true);
+        Weigh(100_000, 20_000, 2, withNts: false);
+        Growth.Print();
+        break;
+    case "gaps":
+        Gaps.PrintCentury();
+        PrintHead();
+        Gaps.PrintContests(folder);
+        Gaps.PrintGrowth();
+        break;
+    default:
+        throw new ArgumentException($"there is no part {args[1]}");
+}
+
+static void PrintHead()
+{
+    Console.Out.Write($"\n{Environment.ProcessorCount} processors, .NET {Environment.Version}\n\n");
+    Console.Out.Write("| work | baseline | median | tool | median | tool / baseline | times faster |\n");
+    Console.Out.Write("|---|---|---|---|---|---|---|\n");
+}
 
 void Triangulate(int count, int rounds, bool withQhull)
 {

@@ -15,6 +15,7 @@ public sealed class FixedWeights
     private readonly int[] starts;
     private readonly int[] sites;
     private readonly double[] weights;
+    private readonly int[] ownerCounts;
 
     /// <summary>Takes the arrays as they are, without a copy; they may not change afterwards.</summary>
     /// <param name="siteCount">How many sites there are.</param>
@@ -44,6 +45,7 @@ public sealed class FixedWeights
         this.starts = starts;
         this.sites = sites;
         this.weights = weights;
+        ownerCounts = [.. Enumerable.Range(0, starts.Length - 1).Select(i => starts[i + 1] - starts[i])];
     }
 
     /// <summary>How many polygons there are.</summary>
@@ -91,9 +93,17 @@ public sealed class FixedWeights
                 int first = group * StepLanes.Count;
                 int count = Math.Min(StepLanes.Count, steps - first);
                 Range block = (first * siteCount)..((first + count) * siteCount);
-                lanes.Load(depths.AsSpan(block), reports.AsSpan(block));
                 Range cells = (first * Count)..((first + count) * Count);
-                Weigh(lanes, count, means.AsSpan(cells), reporting.AsSpan(cells), shares.AsSpan(cells));
+                lanes.Load(depths.AsSpan(block), reports.AsSpan(block));
+                if (lanes.HasGaps)
+                {
+                    WeighGaps(lanes, count, means.AsSpan(cells), reporting.AsSpan(cells), shares.AsSpan(cells));
+                }
+                else
+                {
+                    Weigh(lanes, count, means.AsSpan(cells), reporting.AsSpan(cells), shares.AsSpan(cells));
+                }
+
                 return lanes;
             },
             _ => { }
@@ -103,24 +113,36 @@ public sealed class FixedWeights
     private void Weigh(StepLanes lanes, int count, Span<double> means, Span<int> reporting, Span<double> shares)
     {
         Span<double> sum = stackalloc double[StepLanes.Count];
+        for (int polygon = 0; polygon < Count; polygon++)
+        {
+            lanes.Weigh(OwnersOf(polygon), WeightsOf(polygon), sum);
+            for (int lane = 0; lane < count; lane++)
+            {
+                means[(lane * Count) + polygon] = sum[lane];
+            }
+        }
+
+        shares.Fill(1);
+        for (int lane = 0; lane < count; lane++)
+        {
+            ownerCounts.CopyTo(reporting[(lane * Count)..]);
+        }
+    }
+
+    private void WeighGaps(StepLanes lanes, int count, Span<double> means, Span<int> reporting, Span<double> shares)
+    {
+        Span<double> sum = stackalloc double[StepLanes.Count];
         Span<double> share = stackalloc double[StepLanes.Count];
         Span<int> reported = stackalloc int[StepLanes.Count];
         for (int polygon = 0; polygon < Count; polygon++)
         {
-            ReadOnlySpan<int> owners = sites.AsSpan(starts[polygon]..starts[polygon + 1]);
-            ReadOnlySpan<double> parts = weights.AsSpan(starts[polygon]..starts[polygon + 1]);
-            lanes.Weigh(owners, parts, sum);
-            reported.Fill(owners.Length);
-            if (lanes.HasGaps)
-            {
-                lanes.Share(owners, parts, share);
-                lanes.CountReporting(owners, reported);
-            }
-
+            lanes.Weigh(OwnersOf(polygon), WeightsOf(polygon), sum);
+            lanes.Share(OwnersOf(polygon), WeightsOf(polygon), share);
+            lanes.CountReporting(OwnersOf(polygon), reported);
             for (int lane = 0; lane < count; lane++)
             {
                 int cell = (lane * Count) + polygon;
-                bool isFull = reported[lane] == owners.Length;
+                bool isFull = reported[lane] == ownerCounts[polygon];
                 reporting[cell] = reported[lane];
                 shares[cell] = isFull ? 1 : share[lane];
                 if (reported[lane] > 0)
@@ -130,6 +152,10 @@ public sealed class FixedWeights
             }
         }
     }
+
+    private ReadOnlySpan<int> OwnersOf(int polygon) => sites.AsSpan(starts[polygon]..starts[polygon + 1]);
+
+    private ReadOnlySpan<double> WeightsOf(int polygon) => weights.AsSpan(starts[polygon]..starts[polygon + 1]);
 
     private static void CheckStarts(int[] starts, int end)
     {

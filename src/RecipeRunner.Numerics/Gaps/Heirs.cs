@@ -11,6 +11,8 @@ internal sealed class Heirs
     private const int BytesPerNext = 48;
 
     private Dictionary<(int First, ulong Silent), Heirs>? next;
+    private (int First, ulong Silent) latestWay;
+    private Heirs? latest;
 
     /// <param name="silent">Ranks of the silent sites, ascending.</param>
     /// <param name="ranks">Ranks of the heirs, ascending.</param>
@@ -67,11 +69,24 @@ internal sealed class Heirs
         return 0;
     }
 
-    /// <summary>The heirs when these fall silent too, if they were met before.</summary>
-    public Heirs? Next(int first, ulong silent) => next?.GetValueOrDefault((first, silent));
+    /// <summary>The heirs when these fall silent too, if they were met before; most often it is the same way as last time.</summary>
+    public Heirs? Next(int first, ulong silent)
+    {
+        if (latestWay != (first, silent))
+        {
+            latestWay = (first, silent);
+            latest = next?.GetValueOrDefault(latestWay);
+        }
+
+        return latest;
+    }
 
     /// <summary>Keeps the way to other heirs.</summary>
-    public void Keep(int first, ulong silent, Heirs heirs) => (next ??= []).Add((first, silent), heirs);
+    public void Keep(int first, ulong silent, Heirs heirs)
+    {
+        (next ??= []).Add((first, silent), heirs);
+        (latestWay, latest) = ((first, silent), heirs);
+    }
 
     /// <summary>The silent sites together with those heirs that are silent too, ascending.</summary>
     public int[] SilentWith(int first, ulong silent)

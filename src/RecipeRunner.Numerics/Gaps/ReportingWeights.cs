@@ -14,12 +14,19 @@ namespace RecipeRunner.Numerics.Gaps;
 /// <remarks>
 /// Weights are those that <see cref="AreaWeights"/> finds for the reporting sites alone, within 1e-12, for polygons that are
 /// not too thin for the digits of their coordinates. The same bits for any number of threads, any budget, any order of the
-/// steps and of the sites. Method: <see cref="Estate"/>, <see cref="Succession"/>.
+/// steps and of the sites. Made for outages and closures, which last or are few: where half of the sites are silent by chance
+/// anew at every step, drawing the cells anew is faster. Method: <see cref="Estate"/>, <see cref="Succession"/>.
 /// </remarks>
 public sealed class ReportingWeights
 {
     /// <summary>How much is remembered unless told otherwise: 256 MiB.</summary>
     public const long DefaultBudgetBytes = 256L << 20;
+
+    /// <summary>Groups of neighbouring polygons that a thread takes one after the other, so that none is done long before the rest.</summary>
+    private const int GroupsPerThread = 4;
+
+    /// <summary>So many steps of a record, that they stay near the processor while a group of polygons is at them.</summary>
+    private const int StepsAtOnce = 64;
 
     private readonly PolygonGaps[] polygons;
     private readonly int siteCount;
@@ -125,12 +132,14 @@ public sealed class ReportingWeights
         Lengths.Check(wanted.Length, (long)steps * polygons.Length, nameof(wanted));
         Lengths.Check(means.Length, (long)steps * polygons.Length, nameof(means));
         CheckSilence(steps, reports, wanted);
+        var block = new StepBlock(siteCount, polygons.Length, depths, reports, wanted, means);
         var refusals = new PolygonRefusal?[polygons.Length];
+        int groups = (int)Math.Min(polygons.Length, (long)GroupsPerThread * threads);
         Parallel.For(
             0,
-            polygons.Length,
+            groups,
             new ParallelOptions { MaxDegreeOfParallelism = threads },
-            polygon => refusals[polygon] = ComputeMeans(polygon, steps, depths, reports, wanted, means)
+            group => ComputeMeans(block, steps, GroupOf(group, groups), refusals)
         );
         List<PolygonRefusal> refused = [.. refusals.OfType<PolygonRefusal>()];
         if (refused.Count > 0)
@@ -167,24 +176,30 @@ public sealed class ReportingWeights
         }
     }
 
-    private PolygonRefusal? ComputeMeans(
-        int polygon,
-        int steps,
-        double[] depths,
-        bool[] reports,
-        bool[] wanted,
-        double[] means
-    )
+    private Range GroupOf(int group, int groups) =>
+        (int)((long)group * polygons.Length / groups)..(int)((group + 1L) * polygons.Length / groups);
+
+    private void ComputeMeans(StepBlock block, int steps, Range group, PolygonRefusal?[] refusals)
+    {
+        for (int first = 0; first < steps; first += StepsAtOnce)
+        {
+            int end = Math.Min(first + StepsAtOnce, steps);
+            for (int polygon = group.Start.Value; polygon < group.End.Value; polygon++)
+            {
+                refusals[polygon] ??= ComputeMeans(block, first, end, polygon);
+            }
+        }
+    }
+
+    private PolygonRefusal? ComputeMeans(StepBlock block, int first, int end, int polygon)
     {
         try
         {
-            for (int step = 0; step < steps; step++)
+            for (int step = first; step < end; step++)
             {
-                int cell = (step * polygons.Length) + polygon;
-                if (wanted[cell])
+                if (block.IsWanted(step, polygon))
                 {
-                    means[cell] = polygons[polygon]
-                        .Mean(depths.AsSpan(step * siteCount, siteCount), reports.AsSpan(step * siteCount, siteCount));
+                    block.Mean(step, polygon) = polygons[polygon].Mean(block.Depths(step), block.Reports(step));
                 }
             }
 

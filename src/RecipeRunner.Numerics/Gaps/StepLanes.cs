@@ -15,20 +15,24 @@ internal sealed class StepLanes(int siteCount)
     /// <summary>Whether any site is silent at any of the steps.</summary>
     public bool HasGaps { get; private set; }
 
-    /// <summary>Takes in the next steps of a record; lanes beyond them hold what they held before.</summary>
+    /// <summary>Takes in the next steps of a record, one at least; lanes beyond them repeat the last.</summary>
     public void Load(ReadOnlySpan<double> stepDepths, ReadOnlySpan<bool> stepReports)
     {
         HasGaps = stepReports.Contains(false);
-        for (int start = 0; start < stepDepths.Length; start += siteCount)
+        int last = stepDepths.Length - siteCount;
+        for (int site = 0; site < siteCount; site++)
         {
-            int lane = start / siteCount;
+            Span<double> depthLanes = depths.AsSpan(site * Count, Count);
+            int place = site;
+            for (int lane = 0; lane < depthLanes.Length; lane++)
+            {
+                depthLanes[lane] = stepDepths[place];
+                place = Math.Min(place + siteCount, last + site);
+            }
+
             if (HasGaps)
             {
-                LoadGaps(stepDepths.Slice(start, siteCount), stepReports.Slice(start, siteCount), lane);
-            }
-            else
-            {
-                LoadFull(stepDepths.Slice(start, siteCount), lane);
+                Mask(site, stepReports, last);
             }
         }
     }
@@ -54,24 +58,15 @@ internal sealed class StepLanes(int siteCount)
         }
     }
 
-    private void LoadFull(ReadOnlySpan<double> row, int lane)
+    private void Mask(int site, ReadOnlySpan<bool> stepReports, int last)
     {
-        double[] target = depths;
-        int place = lane;
-        foreach (double depth in row)
+        int place = site;
+        for (int lane = 0; lane < Count; lane++)
         {
-            target[place] = depth;
-            place += Count;
-        }
-    }
-
-    private void LoadGaps(ReadOnlySpan<double> row, ReadOnlySpan<bool> isReporting, int lane)
-    {
-        for (int site = 0; site < row.Length; site++)
-        {
-            int place = (site * Count) + lane;
-            depths[place] = isReporting[site] ? row[site] : 0;
-            reports[place] = isReporting[site] ? 1 : 0;
+            bool isReporting = stepReports[place];
+            reports[(site * Count) + lane] = isReporting ? 1 : 0;
+            depths[(site * Count) + lane] = isReporting ? depths[(site * Count) + lane] : 0;
+            place = Math.Min(place + siteCount, last + site);
         }
     }
 

@@ -1,10 +1,14 @@
 namespace RecipeRunner.Numerics.Triangulation;
 
-/// <summary>Sorts whole-number keys by counting, twelve bits a pass: linear in their number, and stable.</summary>
+/// <summary>
+/// Sorts whole-number keys by counting, twelve bits a pass: linear in their number, and stable. A few keys are inserted one
+/// after the other instead, as the counters would outnumber them.
+/// </summary>
 internal static class RadixSort
 {
     private const int DigitBits = 12;
     private const int Digits = 1 << DigitBits;
+    private const int Few = 64;
 
     /// <summary>Sorts <paramref name="keys"/> ascending in place and returns which original place each came from.</summary>
     /// <param name="keys">Keys; bits above <paramref name="keyBits"/> are zero.</param>
@@ -15,6 +19,12 @@ internal static class RadixSort
         for (int i = 0; i < places.Length; i++)
         {
             places[i] = i;
+        }
+
+        if (keys.Length <= Few)
+        {
+            Insert(keys, places);
+            return places;
         }
 
         ulong[] toKeys = new ulong[keys.Length];
@@ -33,6 +43,21 @@ internal static class RadixSort
         }
 
         return places;
+    }
+
+    private static void Insert(ulong[] keys, int[] places)
+    {
+        for (int i = 1; i < keys.Length; i++)
+        {
+            (ulong key, int place) = (keys[i], places[i]);
+            int to = i;
+            for (; to > 0 && keys[to - 1] > key; to--)
+            {
+                (keys[to], places[to]) = (keys[to - 1], places[to - 1]);
+            }
+
+            (keys[to], places[to]) = (key, place);
+        }
     }
 
     private static void Pass(ulong[] fromKeys, int[] fromPlaces, ulong[] toKeys, int[] toPlaces, int shift)

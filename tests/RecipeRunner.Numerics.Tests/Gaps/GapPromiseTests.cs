@@ -19,6 +19,7 @@ public sealed class GapPromiseTests
                     double[] plain = block.Means(ReportingWeights.DefaultBudgetBytes, 1);
                     block.Means(ReportingWeights.DefaultBudgetBytes, 2).ShouldBe(plain);
                     block.Means(ReportingWeights.DefaultBudgetBytes, 3).ShouldBe(plain);
+                    block.Means(ReportingWeights.DefaultBudgetBytes, int.MaxValue).ShouldBe(plain);
                     block.Means(0, 2).ShouldBe(plain);
                     block.Means(10_000, 1).ShouldBe(plain);
                     block.Renumber(seed).Means(ReportingWeights.DefaultBudgetBytes, 1).ShouldBe(plain);
@@ -69,6 +70,26 @@ public sealed class GapPromiseTests
             double[] found = DrawnAnew.Spread(network.Count, sites, shares);
             found.Zip(expected, (a, b) => Math.Abs(a - b)).Max().ShouldBeLessThanOrEqualTo(1e-12);
         }
+    }
+
+    /// <summary>
+    /// Three gauges around a point; a triangle hangs down from a little above it. The upper gauge owns the tip between the
+    /// two bisectors at 50° and the two sides at 30° from the vertical: a kite of t² / (cot 50° + cot 30°) = 0.389 t², t its
+    /// height, of a triangle of h² tan 30° = 0.577 h², here 8e-16. Either half is too small to be told from rounding.
+    /// </summary>
+    [Fact]
+    public void A_part_too_small_to_be_divided_is_left_to_somebody()
+    {
+        Network network = Network.Of(OnCircle(1e6, 90 / 360.0), OnCircle(1e6, 190 / 360.0), OnCircle(1e6, -10 / 360.0));
+        double half = (1e6 + 0.0345) * Math.Tan(Math.PI / 6);
+        PolygonBatch basin = Shapes.Batch([
+            [(0, 0.0345), (-half, -1e6), (half, -1e6)],
+        ]);
+        ReportingWeights weights = ReportingWeights.Of(network.X, network.Y, basin, 1);
+        weights.Of(0, [true, true, true]).Weights[0].ShouldBe(8e-16, 2e-16);
+        (int[] sites, double[] shares) = weights.Of(0, [false, true, true]);
+        sites.ShouldBe([1, 2]);
+        shares.Sum().ShouldBe(1, 3e-16);
     }
 
     private static (double X, double Y) OnCircle(double radius, double turns) =>
