@@ -31,6 +31,12 @@ internal static class CommandList
             )
             .WithExample("rerun", "monthly-totals.study");
         config
+            .AddCommand<TraceCommand>("trace")
+            .WithDescription(
+                "Show how one areal value came about: gauges, weights, products, then the steps and the lines of the input files behind it."
+            )
+            .WithExample("trace", "monthly-totals.study", "B-2", "2024-01-14");
+        config
             .AddCommand<StepsCommand>("steps")
             .WithDescription("List what a recipe can say, or show one verb or step with an example.")
             .WithExample("steps", "MeanRain");

@@ -33,7 +33,7 @@ internal sealed class RerunCommand(Screen screen) : Command<RerunCommand.Options
                     settings.Study,
                     Kitchen.Language,
                     new OutputReader(),
-                    printer,
+                    new QuietObserver(screen),
                     cancellationToken
                 );
                 printer.Print(report, settings.Study);

@@ -1,24 +1,11 @@
 using System.Globalization;
 using RecipeRunner.Host.Rerunning;
-using RecipeRunner.Host.Running;
 
 namespace RecipeRunner.Cli.Printing;
 
 /// <summary>Prints a rerun: one verdict on the first line, then the reasons.</summary>
-internal sealed class RerunPrinter(Screen screen) : IRunObserver
+internal sealed class RerunPrinter(Screen screen)
 {
-    private const int WordWidth = 11;
-
-    /// <inheritdoc/>
-    public void Titled(string title) { }
-
-    /// <inheritdoc/>
-    public void Progressed(string word, double share) =>
-        screen.Status(ProgressLine.Of(word.PadRight(WordWidth), share, null));
-
-    /// <inheritdoc/>
-    public void Finished(JournalEntry entry) { }
-
     /// <summary>The verdict and the reasons.</summary>
     /// <param name="report">The report.</param>
     /// <param name="study">The study as the person named it.</param>
@@ -66,7 +53,7 @@ internal sealed class RerunPrinter(Screen screen) : IRunObserver
                 $"SAME VALUES    {study} reruns to the same numbers within {RerunReport.Tolerance:0e-0} of each"
             ),
             Verdict.Differs => Text(
-                $"DIFFERS        {study} does not rerun to what it holds; {report.BeyondCount} values differ"
+                $"DIFFERS        {study} does not rerun to what it holds; {report.BeyondCount} value{(report.BeyondCount == 1 ? " differs" : "s differ")}"
             ),
             _ => $"CANNOT RERUN   {study}",
         };

@@ -1,7 +1,6 @@
 using System.Collections.Immutable;
 using RecipeRunner.Host.Running;
 using RecipeRunner.Host.Scripting;
-using RecipeRunner.Host.Sealing;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Host.Rerunning;
@@ -27,73 +26,19 @@ public static class StudyRerun
         CancellationToken cancellation
     )
     {
-        if (!Directory.Exists(folder))
-        {
-            return Unable(
-                Finding.Error("RR0801", new Place(folder), "There is no such folder.", "Name a study's folder.")
-            );
-        }
-
-        var broken = SealCheck.Of(folder, cancellation);
-        if (broken.Count > 0)
-        {
-            return Unable([.. broken]);
-        }
-
-        var scratch = Directory.CreateTempSubdirectory("recipe-runner-rerun-");
         try
         {
-            return Rerun(
-                HeldStudy.Open(folder),
-                Path.Combine(scratch.FullName, "again.study"),
-                language,
-                reader,
-                observer,
-                cancellation
-            );
+            using var replay = StudyReplay.Of(folder, language, observer, cancellation);
+            return StudyComparison.Of(replay.Held, HeldStudy.Open(replay.MadeFolder), reader);
         }
         catch (RefusedException refused)
         {
             return Unable([.. refused.Problems]);
         }
-        finally
-        {
-            scratch.Delete(recursive: true);
-        }
-    }
-
-    private static RerunReport Rerun(
-        HeldStudy held,
-        string again,
-        RecipeLanguage language,
-        IOutputReader reader,
-        IRunObserver observer,
-        CancellationToken cancellation
-    )
-    {
-        var inputs = Path.Combine(held.Payload, "inputs");
-        var recipe = Path.Combine(held.Payload, "recipe", held.RecipeName);
-        var request = new RunRequest(
-            recipe,
-            Directory.Exists(inputs) ? inputs : null,
-            again,
-            held.Settings,
-            Replace: false
-        );
-        try
-        {
-            RecipeRun.Execute(request, language, observer, cancellation);
-        }
         catch (RecipeException failed)
         {
-            return Unable([.. failed.Problems.Select(problem => problem.Problem)]) with
-            {
-                Title = held.Title,
-                MadeWith = held.Tool,
-            };
+            return Unable([.. failed.Problems.Select(problem => problem.Problem)]);
         }
-
-        return StudyComparison.Of(held, HeldStudy.Open(again), reader);
     }
 
     private static RerunReport Unable(params ImmutableArray<Finding> problems) =>

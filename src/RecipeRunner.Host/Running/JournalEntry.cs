@@ -39,6 +39,9 @@ public sealed record JournalEntry
     /// <summary>The artifacts that it took, in the step's order.</summary>
     public required ImmutableArray<StepInput> Inputs { get; init; }
 
+    /// <summary>The step itself.</summary>
+    public required object Step { get; init; }
+
     /// <summary>What it gave.</summary>
     public required Artifact Output { get; init; }
 

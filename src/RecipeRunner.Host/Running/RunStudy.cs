@@ -53,7 +53,7 @@ internal sealed class RunStudy(
         var result = step.Execute(context);
         context.Dispose();
         result.Adopt(new Lineage(this, journal.Count + 1, line));
-        Enter(description, line, taken, context, result);
+        Enter(step, description, line, taken, context, result);
         return result;
     }
 
@@ -91,6 +91,7 @@ internal sealed class RunStudy(
             );
 
     private void Enter(
+        object step,
         StepDescription description,
         RecipeLine line,
         ImmutableArray<StepInput> taken,
@@ -109,6 +110,7 @@ internal sealed class RunStudy(
             Line = line,
             Settings = description.Settings,
             Inputs = taken,
+            Step = step,
             Output = result,
             Statements = [.. context.Statements],
             Assumptions = [.. context.Assumptions],

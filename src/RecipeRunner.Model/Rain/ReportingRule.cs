@@ -85,7 +85,8 @@ public sealed record GaugeCountRule : ReportingRule
     public override bool IsMetBy(int gauges, double share, double nearestMetres) => gauges >= Count;
 
     /// <inheritdoc/>
-    public override string ToSettingText() => string.Create(CultureInfo.InvariantCulture, $"at least {Count} gauges");
+    public override string ToSettingText() =>
+        string.Create(CultureInfo.InvariantCulture, $"at least {Count} gauge{(Count == 1 ? "" : "s")}");
 }
 
 /// <summary>A distance.</summary>
@@ -116,7 +117,8 @@ public sealed record StepCountRule : ICompletenessRule
     public bool IsMetBy(int present, int expected) => present >= Math.Min(Count, expected);
 
     /// <inheritdoc/>
-    public string ToSettingText() => string.Create(CultureInfo.InvariantCulture, $"at least {Count} steps");
+    public string ToSettingText() =>
+        string.Create(CultureInfo.InvariantCulture, $"at least {Count} step{(Count == 1 ? "" : "s")}");
 
     /// <inheritdoc/>
     public override string ToString() => ToSettingText();

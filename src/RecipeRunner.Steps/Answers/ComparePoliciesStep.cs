@@ -27,8 +27,8 @@ public sealed record ComparePoliciesStep(WeightTable Weights, RainRecords Rain, 
     {
         var columns = RecordColumns.Match(context, Weights.Cells.Gauges, Rain);
         var calculation = new ArealCalculation(Weights, Rain, columns);
-        var redraw = calculation.Compute(GapPolicy.Redraw, Reporting, context);
-        var rescale = calculation.Compute(GapPolicy.Rescale, Reporting, context);
+        var redraw = calculation.Compute(GapPolicy.Redraw, Reporting, share => Report(context, share / 2));
+        var rescale = calculation.Compute(GapPolicy.Rescale, Reporting, share => Report(context, 0.5 + (share / 2)));
         var seasons = SeasonsOf(Rain.Times);
         var rows =
             from basin in Enumerable.Range(0, Weights.Basins.Basins.Length)
@@ -41,6 +41,12 @@ public sealed record ComparePoliciesStep(WeightTable Weights, RainRecords Rain, 
             "Where the gap policies part",
             PolicyContrast.TableOf([.. rows], Weights.Basins, Rain.Times)
         );
+    }
+
+    private static void Report(StepContext context, double share)
+    {
+        context.Cancellation.ThrowIfCancellationRequested();
+        context.Progress(share);
     }
 
     /// <summary>The steps of each part of the year, in the order of their first months.</summary>

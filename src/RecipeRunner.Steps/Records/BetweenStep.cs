@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using NodaTime;
 using NodaTime.Text;
 using RecipeRunner.Model.Rain;
@@ -14,7 +15,7 @@ namespace RecipeRunner.Steps.Records;
 /// <param name="Last">The last date, <c>2024-12-31</c>.</param>
 /// <example><code>var january = rain.Between("2024-01-01", "2024-01-31");</code></example>
 [Step("Between dates", Word = "between")]
-public sealed record BetweenStep(RainRecords Rain, string First, string Last) : Step<RainRecords>
+public sealed record BetweenStep(RainRecords Rain, string First, string Last) : Step<RainRecords>, IRecordStep
 {
     /// <inheritdoc/>
     public override RainRecords Execute(StepContext context)
@@ -40,6 +41,10 @@ public sealed record BetweenStep(RainRecords Rain, string First, string Last) : 
         TellOfCutTotals(context, steps[0], steps[^1]);
         return Cut(steps[0], steps.Length);
     }
+
+    /// <inheritdoc/>
+    public ImmutableArray<ValueOrigin> OriginsOf(RainRecords records, int gauge, int step, StepContext context) =>
+        [new EarlierValue(Rain, gauge, Rain.Times.IndexOf(records.Times.LabelAt(step))!.Value)];
 
     private RainRecords Cut(int first, int count)
     {

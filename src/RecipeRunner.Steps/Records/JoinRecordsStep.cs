@@ -15,7 +15,7 @@ namespace RecipeRunner.Steps.Records;
 /// <param name="More">Further records.</param>
 /// <example><code>var all = daily.And(hourly.ToDays(endingAt: "09:00"));</code></example>
 [Step("Join records", Word = "join")]
-public sealed record JoinRecordsStep(RainRecords Rain, RainRecords More) : Step<RainRecords>
+public sealed record JoinRecordsStep(RainRecords Rain, RainRecords More) : Step<RainRecords>, IRecordStep
 {
     /// <inheritdoc/>
     public override RainRecords Execute(StepContext context)
@@ -47,6 +47,16 @@ public sealed record JoinRecordsStep(RainRecords Rain, RainRecords More) : Step<
 
         return joined.ToRecords($"{Rain.Source} and {More.Source}");
     }
+
+    /// <inheritdoc/>
+    public ImmutableArray<ValueOrigin> OriginsOf(RainRecords records, int gauge, int step, StepContext context) =>
+        [
+            .. from source in (RainRecords[])[Rain, More]
+            let column = source.GaugeIds.IndexOf(records.GaugeIds[gauge])
+            let index = source.Times.IndexOf(records.Times.LabelAt(step))
+            where column >= 0 && index is not null && source.StatusesAt(index.Value)[column] != RecordStatus.Missing
+            select new EarlierValue(source, column, index.Value),
+        ];
 
     private void RequireSameSteps()
     {

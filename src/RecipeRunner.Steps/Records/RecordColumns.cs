@@ -12,10 +12,7 @@ internal static class RecordColumns
     /// <exception cref="RefusedException">No gauge has a record.</exception>
     public static int[] Match(StepContext context, GaugeNetwork network, RainRecords records)
     {
-        var columns = records
-            .GaugeIds.Select((id, column) => (id, column))
-            .ToDictionary(pair => pair.id, pair => pair.column, StringComparer.Ordinal);
-        var match = network.Gauges.Select(gauge => columns.GetValueOrDefault(gauge.Id, -1)).ToArray();
+        var match = Of(network, records);
         if (match.All(column => column < 0))
         {
             throw new RefusedException(
@@ -31,6 +28,15 @@ internal static class RecordColumns
         TellOfSilent(context, network, records, match);
         TellOfUnknown(context, network, records);
         return match;
+    }
+
+    /// <summary>For each gauge of the network the column of its record; -1 where it has none.</summary>
+    public static int[] Of(GaugeNetwork network, RainRecords records)
+    {
+        var columns = records
+            .GaugeIds.Select((id, column) => (id, column))
+            .ToDictionary(pair => pair.id, pair => pair.column, StringComparer.Ordinal);
+        return [.. network.Gauges.Select(gauge => columns.GetValueOrDefault(gauge.Id, -1))];
     }
 
     private static void TellOfSilent(StepContext context, GaugeNetwork network, RainRecords records, int[] match)

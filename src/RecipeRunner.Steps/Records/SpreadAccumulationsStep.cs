@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using System.Globalization;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Space;
@@ -16,7 +17,9 @@ namespace RecipeRunner.Steps.Records;
 /// <param name="Neighbours">How many of the nearest gauges that reported at all of the steps give the pattern.</param>
 /// <example><code>var whole = rain.SpreadAccumulations(gauges);</code></example>
 [Step("Spread accumulations", Word = "spread")]
-public sealed record SpreadAccumulationsStep(RainRecords Rain, GaugeNetwork Gauges, int Neighbours) : Step<RainRecords>
+public sealed record SpreadAccumulationsStep(RainRecords Rain, GaugeNetwork Gauges, int Neighbours)
+    : Step<RainRecords>,
+        IRecordStep
 {
     /// <inheritdoc/>
     public override RainRecords Execute(StepContext context)
@@ -45,6 +48,15 @@ public sealed record SpreadAccumulationsStep(RainRecords Rain, GaugeNetwork Gaug
         var records = new RainRecords(Rain.GaugeIds, Rain.Times, depths, statuses, Rain.Source, [.. kept]);
         context.State("values", records.StatusWords());
         return records;
+    }
+
+    /// <inheritdoc/>
+    public ImmutableArray<ValueOrigin> OriginsOf(RainRecords records, int gauge, int step, StepContext context)
+    {
+        var total = Rain
+            .Accumulations.Where(total => total.Gauge == gauge && total.FirstStep <= step && step <= total.LastStep)
+            .ToArray();
+        return [new EarlierValue(Rain, gauge, total.Length == 0 ? step : total[0].LastStep)];
     }
 
     private void Require()

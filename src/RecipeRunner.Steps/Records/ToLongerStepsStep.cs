@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using System.Globalization;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
@@ -15,7 +16,9 @@ namespace RecipeRunner.Steps.Records;
 /// <param name="To">The longer steps.</param>
 /// <param name="Complete">How many of the shorter steps must have a value.</param>
 [Step("To longer steps", Word = "sum up")]
-public sealed record ToLongerStepsStep(RainRecords Rain, TimeStep To, ICompletenessRule Complete) : Step<RainRecords>
+public sealed record ToLongerStepsStep(RainRecords Rain, TimeStep To, ICompletenessRule Complete)
+    : Step<RainRecords>,
+        IRecordStep
 {
     /// <inheritdoc/>
     public override RainRecords Execute(StepContext context)
@@ -47,6 +50,13 @@ public sealed record ToLongerStepsStep(RainRecords Rain, TimeStep To, ICompleten
         var records = new RainRecords(Rain.GaugeIds, target, depths, statuses, Rain.Source);
         context.State("values", records.StatusWords());
         return records;
+    }
+
+    /// <inheritdoc/>
+    public ImmutableArray<ValueOrigin> OriginsOf(RainRecords records, int gauge, int step, StepContext context)
+    {
+        var (first, count, _) = StepFit.Of(Rain, To).StepsOf(records.Times.LabelAt(step));
+        return [.. Enumerable.Range(first, count).Select(t => new EarlierValue(Rain, gauge, t))];
     }
 
     private void TellOfShortSums(StepContext context, int[] shorts)

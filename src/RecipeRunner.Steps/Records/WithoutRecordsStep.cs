@@ -10,7 +10,7 @@ namespace RecipeRunner.Steps.Records;
 /// <param name="Ids">The gauges to leave out.</param>
 /// <example><code>var others = rain.Without("Q-19");</code></example>
 [Step("Leave out records", Word = "without")]
-public sealed record WithoutRecordsStep(RainRecords Rain, ImmutableArray<string> Ids) : Step<RainRecords>
+public sealed record WithoutRecordsStep(RainRecords Rain, ImmutableArray<string> Ids) : Step<RainRecords>, IRecordStep
 {
     /// <inheritdoc/>
     public override RainRecords Execute(StepContext context)
@@ -41,6 +41,10 @@ public sealed record WithoutRecordsStep(RainRecords Rain, ImmutableArray<string>
         );
         return Only(kept);
     }
+
+    /// <inheritdoc/>
+    public ImmutableArray<ValueOrigin> OriginsOf(RainRecords records, int gauge, int step, StepContext context) =>
+        [new EarlierValue(Rain, Rain.GaugeIds.IndexOf(records.GaugeIds[gauge]), step)];
 
     private RainRecords Only(int[] kept)
     {

@@ -39,14 +39,16 @@ internal sealed class ArealCalculation
     private int Basins => weights.Basins.Basins.Length;
 
     /// <summary>The series under one gap policy.</summary>
+    /// <param name="gaps">What to do where a gauge is missing.</param>
+    /// <param name="rule">What must report for a basin to have a value.</param>
+    /// <param name="progress">Told the share done, before each block.</param>
     /// <exception cref="RefusedException">Basins too thin to be weighed by some set of gauges.</exception>
-    public ArealRainfall Compute(GapPolicy gaps, ReportingRule rule, StepContext context)
+    public ArealRainfall Compute(GapPolicy gaps, ReportingRule rule, Action<double> progress)
     {
         var values = new ArealValue[rain.Times.Count * Basins];
         for (var first = 0; first < rain.Times.Count; first += BlockSteps)
         {
-            context.Cancellation.ThrowIfCancellationRequested();
-            context.Progress((double)first / rain.Times.Count);
+            progress((double)first / rain.Times.Count);
             var count = Math.Min(BlockSteps, rain.Times.Count - first);
             Fill(new StepBlock(rain, columns, first, count, Basins), gaps, rule, values);
         }

@@ -55,6 +55,10 @@ internal sealed class GaugeDistances
         return closest[^1].Bound >= best ? best : NearestOfAll(best, reports);
     }
 
+    /// <summary>Metres to one gauge, 0 inside the basin.</summary>
+    /// <param name="gauge">Index of the gauge.</param>
+    public double ToGauge(int gauge) => Exact(gauge);
+
     private double? NearestOfAll(double? best, ReadOnlySpan<bool> reports)
     {
         for (var gauge = 0; gauge < reports.Length; gauge++)

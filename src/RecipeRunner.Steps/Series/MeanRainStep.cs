@@ -20,19 +20,40 @@ namespace RecipeRunner.Steps.Series;
 /// <example><code>var areal = weights.MeanRain(rain, gaps: GapPolicy.Redraw, reporting: AtLeast.Percent(60) &amp; Within.Kilometres(30));</code></example>
 [Step("Mean rain", Word = "rain", Source = "Thiessen 1911, doi:10.1175/1520-0493(1911)39<1082b:PAFLA>2.0.CO;2")]
 public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPolicy Gaps, ReportingRule Reporting)
-    : Step<ArealRainfall>
+    : Step<ArealRainfall>,
+        IArealStep
 {
     /// <inheritdoc/>
     public override ArealRainfall Execute(StepContext context)
     {
         var network = Weights.Cells.Gauges;
         var columns = RecordColumns.Match(context, network, Rain);
-        var areal = new ArealCalculation(Weights, Rain, columns).Compute(Gaps, Reporting, context);
+        var areal = new ArealCalculation(Weights, Rain, columns).Compute(
+            Gaps,
+            Reporting,
+            share =>
+            {
+                context.Cancellation.ThrowIfCancellationRequested();
+                context.Progress(share);
+            }
+        );
         context.Assume(PolicyWords());
         context.Assume("A missing value is not zero: it is left out, as the gap policy says.");
         TellOfWithheld(context, areal);
         return areal;
     }
+
+    /// <inheritdoc/>
+    public ArealAccount AccountFor(ArealRainfall areal, int step, int basin) =>
+        new ValueAccount(this, RecordColumns.Of(Weights.Cells.Gauges, Rain)).Of(areal, step, basin);
+
+    /// <inheritdoc/>
+    public ArealRainfall Recompute(WeightTable weights, RainRecords rain) =>
+        new ArealCalculation(weights, rain, RecordColumns.Of(weights.Cells.Gauges, rain)).Compute(
+            Gaps,
+            Reporting,
+            _ => { }
+        );
 
     private string PolicyWords() =>
         Gaps switch
