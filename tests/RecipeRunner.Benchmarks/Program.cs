@@ -5,6 +5,12 @@ using RecipeRunner.Numerics.Triangulation;
 using RecipeRunner.Numerics.Weights;
 
 string folder = args.Length > 0 ? args[0] : throw new ArgumentException("start it by run.sh");
+if (args.Length > 1 && args[1].StartsWith("reading", StringComparison.Ordinal))
+{
+    Reading.Run(folder, args[1]);
+    return;
+}
+
 Console.Out.Write($"{Environment.ProcessorCount} processors, .NET {Environment.Version}\n\n");
 Console.Out.Write("| work | baseline | median | tool | median | tool / baseline | times faster |\n");
 Console.Out.Write("|---|---|---|---|---|---|---|\n");

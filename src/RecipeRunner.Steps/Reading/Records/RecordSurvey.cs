@@ -6,6 +6,7 @@ namespace RecipeRunner.Steps.Reading.Records;
 internal sealed class RecordSurvey
 {
     private readonly int[] silentSince;
+    private int silent;
 
     private RecordSurvey(int gauges)
     {
@@ -61,17 +62,31 @@ internal sealed class RecordSurvey
 
     private void AddStatuses(int step, ReadOnlySpan<RecordStatus> statuses, int shortest)
     {
+        if (silent == 0 && !statuses.ContainsAnyExcept(RecordStatus.Observed))
+        {
+            return;
+        }
+
         for (var gauge = 0; gauge < statuses.Length; gauge++)
         {
             if (statuses[gauge] == RecordStatus.Missing)
             {
                 Missing[gauge]++;
-                silentSince[gauge] = silentSince[gauge] < 0 ? step : silentSince[gauge];
+                BeginSilence(gauge, step);
                 continue;
             }
 
             EndSilence(gauge, step, shortest);
             Failed[gauge] += statuses[gauge] == RecordStatus.Failed ? 1 : 0;
+        }
+    }
+
+    private void BeginSilence(int gauge, int step)
+    {
+        if (silentSince[gauge] < 0)
+        {
+            silentSince[gauge] = step;
+            silent++;
         }
     }
 
@@ -84,6 +99,7 @@ internal sealed class RecordSurvey
         }
 
         silentSince[gauge] = -1;
+        silent--;
         if (step - since >= shortest)
         {
             Silences.Add(new Silence(gauge, since, step - since));
