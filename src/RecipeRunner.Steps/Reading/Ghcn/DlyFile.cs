@@ -23,7 +23,7 @@ internal static class DlyFile
     /// <summary>Reads all rows.</summary>
     public static void Read(TextInput text, GhcnRows rows, StepContext context)
     {
-        using var reader = new StreamReader(text.Start());
+        using var reader = text.Start();
         var line = 0;
         while (reader.ReadLine() is { } row)
         {

@@ -7,6 +7,8 @@ namespace RecipeRunner.Steps.Reading.Ghcn;
 /// <summary>Reads one GHCN-Daily file of either form, told apart by its first row.</summary>
 internal static class GhcnFile
 {
+    private const int LeastLength = 21;
+
     /// <summary>Reads a file.</summary>
     /// <param name="context">Opens the file.</param>
     /// <param name="name">The file.</param>
@@ -39,7 +41,10 @@ internal static class GhcnFile
         return (rows, isFixed ? "GHCN-Daily, .dly" : "GHCN-Daily, a value a row");
     }
 
-    /// <summary>True for the fixed-width form: no comma where the id ends.</summary>
+    /// <summary>True where the first row is of one of the two forms.</summary>
+    public static bool LooksLike(TextInput text) => FormOf(FirstRow(text)) is not null;
+
+    /// <summary>True for the fixed-width form.</summary>
     /// <exception cref="RefusedException">The first row is of neither form.</exception>
     private static bool IsFixedWidth(TextInput text)
     {
@@ -48,17 +53,9 @@ internal static class GhcnFile
             throw CsvText.Empty(text.Name);
         }
 
-        using var reader = new StreamReader(text.Start(), leaveOpen: true);
-        var row = reader.ReadLine() ?? "";
-        var isId = row.Length > GhcnLayout.IdLength && row.AsSpan(0, GhcnLayout.IdLength).IndexOfAny(',', ' ') < 0;
-        if (isId && row[GhcnLayout.IdLength] == ',')
-        {
-            return false;
-        }
-
-        return isId && char.IsAsciiDigit(row[GhcnLayout.IdLength])
-            ? true
-            : throw new RefusedException(
+        var row = FirstRow(text);
+        return FormOf(row)
+            ?? throw new RefusedException(
                 Finding.Error(
                     "RR0285",
                     new Place(text.Name, 1),
@@ -67,4 +64,21 @@ internal static class GhcnFile
                 )
             );
     }
+
+    private static string FirstRow(TextInput text)
+    {
+        using var reader = text.Start();
+        return reader.ReadLine() ?? "";
+    }
+
+    /// <summary>True for the fixed-width form, whose id is followed by a year, false for a value a row, whose id is followed by a comma; null for neither.</summary>
+    private static bool? FormOf(string row) =>
+        row.Length < LeastLength || row.AsSpan(0, GhcnLayout.IdLength).ContainsAny(',', ' ', ';') ? null
+        : row[GhcnLayout.IdLength] == ','
+            ? AreDigits(row.AsSpan(GhcnLayout.IdLength + 1, 8)) ? false
+                : null
+        : AreDigits(row.AsSpan(GhcnLayout.IdLength, 6)) ? true
+        : null;
+
+    private static bool AreDigits(ReadOnlySpan<char> text) => text.IndexOfAnyExceptInRange('0', '9') < 0;
 }

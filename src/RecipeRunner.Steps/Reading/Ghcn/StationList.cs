@@ -19,7 +19,7 @@ internal static class StationList
     public static List<Gauge> Read(StepContext context, string file, IReadOnlySet<string>? wanted)
     {
         using var text = TextInput.Open(context, file);
-        using var reader = new StreamReader(text.Start());
+        using var reader = text.Start();
         var (problems, gauges, lines) = (
             new Problems(),
             new List<Gauge>(),
