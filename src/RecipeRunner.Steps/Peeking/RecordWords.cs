@@ -52,7 +52,7 @@ internal static class RecordWords
                 "caution",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{survey.Impossible.Count:N0} values are {(isMillimetres ? "" : "if in millimetres ")}more than was ever measured in such a step ({limit} mm), the first {records.DepthsAt(step)[gauge]:0.###} at {records.GaugeIds[gauge]}, {records.Times.TextAt(step)}."
+                    $"{survey.ImpossibleCount:N0} values are {(isMillimetres ? "" : "if in millimetres ")}more than was ever measured in such a step ({limit} mm), the first {records.DepthsAt(step)[gauge]:0.###} at {records.GaugeIds[gauge]}, {records.Times.TextAt(step)}."
                 )
             );
         }

@@ -5,6 +5,8 @@ namespace RecipeRunner.Steps.Reading.Records;
 /// <summary>What is to be said of records, gathered in one pass over their steps.</summary>
 internal sealed class RecordSurvey
 {
+    private const int MostKept = 5;
+
     private readonly int[] silentSince;
     private int silent;
 
@@ -16,8 +18,11 @@ internal sealed class RecordSurvey
         Failed = new int[gauges];
     }
 
-    /// <summary>Values beyond any that was ever measured in a step of their length, with that limit.</summary>
+    /// <summary>The first values beyond any that was ever measured in a step of their length, with that limit.</summary>
     public List<(int Step, int Gauge, double Limit)> Impossible { get; } = [];
+
+    /// <summary>How many there are.</summary>
+    public int ImpossibleCount { get; private set; }
 
     /// <summary>Runs of missing values of at least the length asked for, by their end, then gauge.</summary>
     public List<Silence> Silences { get; } = [];
@@ -55,8 +60,17 @@ internal sealed class RecordSurvey
         {
             if (depths[gauge] > limit && statuses[gauge] != RecordStatus.Failed)
             {
-                Impossible.Add((step, gauge, limit));
+                AddImpossible(step, gauge, limit);
             }
+        }
+    }
+
+    private void AddImpossible(int step, int gauge, double limit)
+    {
+        ImpossibleCount++;
+        if (Impossible.Count < MostKept)
+        {
+            Impossible.Add((step, gauge, limit));
         }
     }
 
