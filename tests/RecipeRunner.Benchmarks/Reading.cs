@@ -54,7 +54,7 @@ internal static class Reading
             FileName,
             RainUnit.Millimetres,
             TimeStep.Minutes(15),
-            missing: []
+            missing: ["-9999"]
         );
 
     private static double Sum(RainRecords records)

@@ -90,6 +90,18 @@ public sealed class GhcnTests : IDisposable
         records.Accumulations.ShouldBe([new Accumulation(0, 30, 32, 5)]);
     }
 
+    [Fact]
+    public void A_day_that_has_only_a_total_has_a_row()
+    {
+        bench.Write(
+            "2024.csv",
+            $"{Station},20240101,PRCP,1,,,7,\n{Station},20240103,MDPR,9,,,7,\n{Station},20240103,DAPR,2,,,7,\n{Station},20240104,PRCP,1,,,7,\n"
+        );
+        bench.Verbs.ReadGhcnDaily("2024.csv", Morning).Accumulations.ShouldBe([new Accumulation(0, 1, 2, 0.9)]);
+
+        bench.Study.Findings.Single(finding => finding.Code == "RR0258").What.ShouldStartWith("1 steps");
+    }
+
     [Theory]
     [InlineData("  123  7", "-9999   ")] // no number of days
     [InlineData("  123 X7", "    3  7")] // the total failed

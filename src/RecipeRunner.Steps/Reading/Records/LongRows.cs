@@ -110,6 +110,12 @@ internal sealed class LongRows(string file, TimeStep step)
                 LastStep = total.LastStep - span.Lowest,
             }
         );
+        foreach (var total in moved)
+        {
+            var at = (total.LastStep * ids.Length) + total.Gauge;
+            lines[at] = lines[at] > 0 ? lines[at] : total.Line;
+        }
+
         return new RecordPart(
             file,
             ids,
