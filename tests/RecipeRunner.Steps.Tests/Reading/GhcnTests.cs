@@ -1,6 +1,4 @@
 using System.Globalization;
-using System.IO.Compression;
-using System.Text;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Time;
 using RecipeRunner.Steps.Reading.Ghcn;
@@ -14,7 +12,7 @@ namespace RecipeRunner.Steps.Tests.Reading;
 /// </summary>
 public sealed class GhcnTests : IDisposable
 {
-    private const string Station = "USC00026481"; // the readme's own example of an id: Phoenix airport, section I
+    private const string Station = DlyRow.Station;
     private static readonly TimeStep Morning = TimeStep.Days(endingAt: "07:00");
     private readonly Bench bench = new();
 
@@ -23,7 +21,7 @@ public sealed class GhcnTests : IDisposable
     [Fact]
     public void A_row_of_the_fixed_form_is_as_wide_as_the_table_of_columns_says() =>
         // source: readme.txt, section III: SFLAG31 stands in column 269.
-        (Row(2024, 1, "PRCP").Length, DlyFile.RowLength).ShouldBe((269, 269));
+        (DlyRow.Of(2024, 1, "PRCP").Length, DlyFile.RowLength).ShouldBe((269, 269));
 
     [Fact]
     public void Values_and_flags_mean_what_the_readme_says()
@@ -31,8 +29,8 @@ public sealed class GhcnTests : IDisposable
         // source: readme.txt, section III: PRCP in tenths of mm, -9999 missing, MFLAG T trace, MFLAG P missing presumed zero,
         // any QFLAG a failed check, MFLAG B and D totals of parts of the day, 31 April does not exist.
         var records = ReadDly(
-            Row(2024, 4, "TMAX", (1, "  215  S")),
-            Row(
+            DlyRow.Of(2024, 4, "TMAX", (1, "  215  S")),
+            DlyRow.Of(
                 2024,
                 4,
                 "PRCP",
@@ -55,7 +53,7 @@ public sealed class GhcnTests : IDisposable
     [Fact]
     public void The_last_day_of_a_row_ends_in_its_last_column()
     {
-        var records = ReadDly(Row(2024, 1, "PRCP", (31, "    5  7")));
+        var records = ReadDly(DlyRow.Of(2024, 1, "PRCP", (31, "    5  7")));
 
         records.Times.TextAt(30).ShouldBe("2024-01-31");
         Depths(records)[30].ShouldBe(0.5);
@@ -67,9 +65,9 @@ public sealed class GhcnTests : IDisposable
     public void A_total_of_several_days_is_an_accumulation(bool countFirst)
     {
         // source: readme.txt, section III: MDPR multiday total, use with DAPR, the number of days included.
-        string[] rows = [Row(2024, 1, "MDPR", (4, "  123  7")), Row(2024, 1, "DAPR", (4, "    3  7"))];
+        string[] rows = [DlyRow.Of(2024, 1, "MDPR", (4, "  123  7")), DlyRow.Of(2024, 1, "DAPR", (4, "    3  7"))];
         var records = ReadDly([
-            Row(2024, 1, "PRCP", (1, "   10  7"), (5, "   20  7")),
+            DlyRow.Of(2024, 1, "PRCP", (1, "   10  7"), (5, "   20  7")),
             .. countFirst ? rows.Reverse() : rows,
         ]);
 
@@ -81,10 +79,10 @@ public sealed class GhcnTests : IDisposable
     public void A_total_reaches_back_over_the_end_of_a_month()
     {
         var records = ReadDly(
-            Row(2023, 12, "PRCP", (30, "   10  7")),
-            Row(2024, 1, "PRCP", (3, "   10  7")),
-            Row(2024, 1, "MDPR", (2, "   50  7")),
-            Row(2024, 1, "DAPR", (2, "    3  7"))
+            DlyRow.Of(2023, 12, "PRCP", (30, "   10  7")),
+            DlyRow.Of(2024, 1, "PRCP", (3, "   10  7")),
+            DlyRow.Of(2024, 1, "MDPR", (2, "   50  7")),
+            DlyRow.Of(2024, 1, "DAPR", (2, "    3  7"))
         );
 
         records.Accumulations.ShouldBe([new Accumulation(0, 30, 32, 5)]);
@@ -109,9 +107,9 @@ public sealed class GhcnTests : IDisposable
     public void A_total_that_cannot_be_used_leaves_its_days_without_a_value(string total, string days)
     {
         var records = ReadDly(
-            Row(2024, 1, "PRCP", (1, "   10  7")),
-            Row(2024, 1, "MDPR", (4, total)),
-            Row(2024, 1, "DAPR", (4, days))
+            DlyRow.Of(2024, 1, "PRCP", (1, "   10  7")),
+            DlyRow.Of(2024, 1, "MDPR", (4, total)),
+            DlyRow.Of(2024, 1, "DAPR", (4, days))
         );
 
         records.Accumulations.ShouldBeEmpty();
@@ -122,7 +120,7 @@ public sealed class GhcnTests : IDisposable
     [Fact]
     public void A_trace_with_a_depth_is_not_used()
     {
-        Statuses(ReadDly(Row(2024, 1, "PRCP", (1, "   10T 7"))))[0].ShouldBe('F');
+        Statuses(ReadDly(DlyRow.Of(2024, 1, "PRCP", (1, "   10T 7"))))[0].ShouldBe('F');
         Codes().ShouldContain("RR0288");
     }
 
@@ -130,7 +128,7 @@ public sealed class GhcnTests : IDisposable
     public void Both_forms_give_the_same_records()
     {
         var fixedForm = ReadDly(
-            Row(
+            DlyRow.Of(
                 2024,
                 1,
                 "PRCP",
@@ -215,128 +213,10 @@ public sealed class GhcnTests : IDisposable
     [Fact]
     public void Years_in_packed_files_are_read_as_one()
     {
-        bench.Write("2023.csv.gz", Pack($"{Station},20231231,PRCP,10,,,7,\n"));
-        bench.Write("2024.csv.gz", Pack($"{Station},20240101,PRCP,20,,,7,\nUSC00000002,20240101,SNOW,20,,,7,\n"));
+        bench.Write("2023.csv.gz", Gzip.Pack($"{Station},20231231,PRCP,10,,,7,\n"));
+        bench.Write("2024.csv.gz", Gzip.Pack($"{Station},20240101,PRCP,20,,,7,\nUSC00000002,20240101,SNOW,20,,,7,\n"));
 
         Depths(bench.Verbs.ReadGhcnDaily("20??.csv.gz", Morning)).ShouldBe([1, 2]);
-    }
-
-    [Theory]
-    [InlineData("RR0278", 2, 0, "cut")]
-    [InlineData("RR0279", 2, 22, "value")]
-    [InlineData("RR0279", 2, 12, "year")]
-    [InlineData("RR0279", 2, 12, "month")]
-    [InlineData("RR0279", 2, 254, "30 February")]
-    [InlineData("RR0279", 2, 22, "less than zero")]
-    [InlineData("RR0255", 2, 22, "twice")]
-    public void Damage_in_a_fixed_row_is_refused_at_its_place(string code, int line, int column, string damage)
-    {
-        var first = Row(2023, 2, "PRCP", (1, "   10  7"));
-        var row = damage switch
-        {
-            "cut" => Row(2024, 2, "PRCP")[..^1],
-            "value" => Row(2024, 2, "PRCP", (1, "  1O0  7")),
-            "year" => Row(2024, 2, "PRCP").Replace("202402", "20x402", StringComparison.Ordinal),
-            "month" => Row(2024, 13, "PRCP"),
-            "30 February" => Row(2024, 2, "PRCP", (30, "    1  7")),
-            "less than zero" => Row(2024, 2, "PRCP", (1, "   -1  7")),
-            _ => first,
-        };
-        bench.Write("a.dly", first + "\n" + row + "\n");
-        var problem = Bench.Refused(() => bench.Verbs.ReadGhcnDaily("a.dly", Morning))[0];
-
-        (problem.Code, problem.Where.Line, problem.Where.Column).ShouldBe((code, line, column));
-        problem.Mend.ShouldNotBeEmpty();
-    }
-
-    [Theory]
-    [InlineData("USC00026481,20240101,PRCP,1,,,7\n", "RR0278", 0)]
-    [InlineData("USC00026481,20240230,PRCP,1,,,7,\n", "RR0279", 2)]
-    [InlineData("USC00026481,2024-01-01,PRCP,1,,,7,\n", "RR0279", 2)]
-    [InlineData("USC00026481,20240101,PRCP,1.5,,,7,\n", "RR0279", 4)]
-    [InlineData("USC00026481,20240101,PRCP,-1,,,7,\n", "RR0279", 4)]
-    [InlineData("USC00026481,20240101,PRCP,1,TT,,7,\n", "RR0279", 5)]
-    [InlineData("USC26481,20240101,PRCP,1,,,7,\n", "RR0279", 1)]
-    [InlineData("USC00026481,20240102,PRCP,1,,,7,\n", "RR0255", 4)]
-    [InlineData("USC00026481,20240103,MDPR,1,,,7,\nUSC00026481,20240103,MDPR,2,,,7,\n", "RR0255", 4)]
-    public void Damage_in_a_row_of_one_value_is_refused_at_its_place(string rows, string code, int column)
-    {
-        bench.Write("2024.csv", "USC00026481,20240102,PRCP,3,,,7,\n" + rows);
-        var problem = Bench.Refused(() => bench.Verbs.ReadGhcnDaily("2024.csv", Morning))[0];
-
-        (problem.Code, problem.Where.Column).ShouldBe((code, column));
-        problem.Where.Line.ShouldBeGreaterThan(1);
-    }
-
-    [Theory]
-    [InlineData("date,A\n2024-01-01,1\n", "RR0285")]
-    [InlineData("", "RR0201")]
-    [InlineData("USC00026481,20240101,TMAX,1,,,7,\n", "RR0287")]
-    public void Other_files_are_refused(string text, string code)
-    {
-        bench.Write("a.csv", text);
-
-        Bench.Refused(() => bench.Verbs.ReadGhcnDaily("a.csv", Morning))[0].Code.ShouldBe(code);
-    }
-
-    [Fact]
-    public void Only_days_can_be_read()
-    {
-        bench.Write("2024.csv", $"{Station},20240101,PRCP,1,,,7,\n");
-
-        Bench.Refused(() => bench.Verbs.ReadGhcnDaily("2024.csv", TimeStep.Hours()))[0].Code.ShouldBe("RR0286");
-        Bench.Refused(() => bench.Verbs.ReadGhcnDaily("2024.csv", TimeStep.Months))[0].Code.ShouldBe("RR0286");
-    }
-
-    [Fact]
-    public void Bytes_changed_at_random_are_refused_or_read_and_nothing_else()
-    {
-        var rows = new[] { "PRCP", "MDPR", "DAPR" }.Select(element => Row(2024, 1, element, (3, "    2  7"))).ToArray();
-        var random = new Random(20240109);
-        var good = Encoding.ASCII.GetBytes(string.Join('\n', rows) + "\n");
-        var refused = 0;
-        for (var round = 0; round < 400; round++)
-        {
-            var bytes = good.ToArray();
-            bytes[random.Next(bytes.Length)] = (byte)random.Next(256);
-            bench.Write("a.dly", bytes);
-            try
-            {
-                bench.Verbs.ReadGhcnDaily("a.dly", Morning).DepthsAt(0)[0].ShouldBeInRange(0, 10_000);
-            }
-            catch (Model.Steps.RefusedException refusal)
-            {
-                refused++;
-                refusal.Problems[0].Where.File.ShouldBe("a.dly");
-            }
-        }
-
-        refused.ShouldBeGreaterThan(100);
-    }
-
-    /// <summary>A row by the table of columns: id 1-11, year 12-15, month 16-17, element 18-21, value 22-26, flags 27, 28, 29, and so on.</summary>
-    private static string Row(int year, int month, string element, params (int Day, string Value)[] values)
-    {
-        var row = new StringBuilder(
-            string.Create(CultureInfo.InvariantCulture, $"{Station}{year:0000}{month:00}{element}")
-        );
-        for (var day = 1; day <= 31; day++)
-        {
-            row.Append(values.FirstOrDefault(value => value.Day == day).Value ?? "-9999   ");
-        }
-
-        return row.ToString();
-    }
-
-    private static byte[] Pack(string text)
-    {
-        using var packed = new MemoryStream();
-        using (var packer = new GZipStream(packed, CompressionLevel.Optimal, leaveOpen: true))
-        {
-            packer.Write(Encoding.UTF8.GetBytes(text));
-        }
-
-        return packed.ToArray();
     }
 
     private static string Statuses(RainRecords records) =>

@@ -1,5 +1,3 @@
-using System.IO.Compression;
-using System.Text;
 using RecipeRunner.Steps.Peeking;
 using RecipeRunner.Steps.Tests.Support;
 
@@ -95,25 +93,14 @@ public sealed class PeekTests : IDisposable
     [Fact]
     public void Packed_files_and_both_forms_of_the_daily_network_are_looked_into()
     {
-        bench.Write("rain.csv.gz", Pack("date,A\n2024-01-01,1\n"));
+        bench.Write("rain.csv.gz", Gzip.Pack("date,A\n2024-01-01,1\n"));
         Lines("rain.csv.gz")["gauges"].ShouldBe(["1: A"]);
-        bench.Write("2024.csv.gz", Pack("USC00026481,20240101,PRCP,12,,,7,\n"));
+        bench.Write("2024.csv.gz", Gzip.Pack("USC00026481,20240101,PRCP,12,,,7,\n"));
         Lines("2024.csv.gz")["largest"].ShouldBe(["1.2 at USC00026481 on 2024-01-01, in millimetres"]);
         bench.Write("a.dly", "USC00026481202401PRCP   12  7" + string.Concat(Enumerable.Repeat("-9999   ", 30)) + "\n");
         var fixedForm = Lines("a.dly");
         fixedForm["largest"].ShouldBe(["1.2 at USC00026481 on 2024-01-01, in millimetres"]);
         fixedForm["read with"].ShouldBe(["ReadGhcnDaily(\"a.dly\", TimeStep.Days(endingAt: \"…\"))"]);
-    }
-
-    private static byte[] Pack(string text)
-    {
-        using var packed = new MemoryStream();
-        using (var packer = new GZipStream(packed, CompressionLevel.Optimal, leaveOpen: true))
-        {
-            packer.Write(Encoding.UTF8.GetBytes(text));
-        }
-
-        return packed.ToArray();
     }
 
     private ILookup<string, string> At(string name, string text)
