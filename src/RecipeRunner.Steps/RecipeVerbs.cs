@@ -96,6 +96,20 @@ public sealed class RecipeVerbs
             )
         );
 
+    /// <inheritdoc cref="ReadGhcnDailyStep"/>
+    /// <param name="file">The file, relative to the data folder; with * or ? in its name, all files that fit, read as one.</param>
+    /// <param name="step">The observation days.</param>
+    /// <param name="gauges">The network whose gauges are wanted; all of the file's where not given.</param>
+    public RainRecords ReadGhcnDaily(string file, TimeStep step, GaugeNetwork? gauges = null) =>
+        study.Run(new ReadGhcnDailyStep(file, step, gauges));
+
+    /// <inheritdoc cref="ReadGhcnStationsStep"/>
+    /// <param name="file">The file, relative to the data folder.</param>
+    /// <param name="of">Records whose gauges are wanted.</param>
+    /// <param name="ids">The ids that are wanted; all of the file's, or of the records, where none is given.</param>
+    public GaugeNetwork ReadGhcnStations(string file, RainRecords? of = null, IReadOnlyList<string>? ids = null) =>
+        study.Run(new ReadGhcnStationsStep(file, of, [.. ids ?? []]));
+
     /// <inheritdoc cref="EmitLayerStep"/>
     /// <param name="layer">What to write: basins, gauges, cells, pieces, triangles.</param>
     /// <param name="name">The layer's name, such as <c>cells</c> or <c>cells.geojson</c>.</param>

@@ -21,6 +21,9 @@ switch (args[1])
         Gaps.PrintContests(folder);
         Gaps.PrintGrowth();
         break;
+    case var part when part.StartsWith("reading", StringComparison.Ordinal):
+        Reading.Run(folder, part);
+        break;
     default:
         throw new ArgumentException($"there is no part {args[1]}");
 }

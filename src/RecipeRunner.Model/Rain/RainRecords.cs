@@ -96,9 +96,10 @@ public sealed class RainRecords : Artifact
     public ImmutableArray<int> CountByStatus()
     {
         var counts = new int[(int)RecordStatus.Failed + 1];
-        foreach (var status in statuses)
+        var bytes = MemoryMarshal.AsBytes(statuses.AsSpan());
+        for (var status = 0; status < counts.Length; status++)
         {
-            counts[(int)status]++;
+            counts[status] = bytes.Count((byte)status);
         }
 
         return [.. counts];

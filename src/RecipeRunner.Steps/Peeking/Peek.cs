@@ -7,7 +7,7 @@ namespace RecipeRunner.Steps.Peeking;
 public static class Peek
 {
     /// <summary>What is in a file.</summary>
-    /// <param name="path">The file: a shapefile, GeoJSON, or CSV with gauges or records.</param>
+    /// <param name="path">The file: a shapefile, GeoJSON, a table of gauges or records, or GHCN-Daily; tables also packed (.gz).</param>
     /// <param name="cancellation">Stops the look.</param>
     /// <returns>What each line is about, and the line.</returns>
     /// <exception cref="RefusedException">There is no such file, or it is damaged or of another kind.</exception>
@@ -22,7 +22,7 @@ public static class Peek
 
         var context = new PeekContext(Path.GetDirectoryName(Path.GetFullPath(path))!, cancellation);
         var name = Path.GetFileName(path);
-        var isTable = TextInput.EndingOf(name) is ".csv" or ".txt" or ".tsv";
+        var isTable = TextInput.EndingOf(name) is ".csv" or ".txt" or ".tsv" or ".dly";
         var lines = isTable ? TablePeek.Of(context, name) : LayerPeek.Of(context, name);
         return lines.Concat(context.Findings.Select(FindingLine));
     }

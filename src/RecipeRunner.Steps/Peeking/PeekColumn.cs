@@ -8,12 +8,12 @@ internal sealed class PeekColumn(string name)
 {
     private const int MostDistinct = 1000;
     private const int Shown = 3;
-    private static readonly string[] UsualMarkers = ["-9999", "-999", "-99.9", "-99", "NA", "NaN", "M", "-"];
 
     private readonly HashSet<string> distinct = new(StringComparer.Ordinal);
     private readonly List<string> examples = [];
     private int blanks;
     private int numbers;
+    private int marks;
     private double lowest = double.PositiveInfinity;
     private double highest = double.NegativeInfinity;
     private string odd = "";
@@ -27,8 +27,14 @@ internal sealed class PeekColumn(string name)
     /// <summary>The first cell; empty where there is none.</summary>
     public string First { get; private set; } = "";
 
-    /// <summary>Usual marks of a missing value that stand in it.</summary>
-    public HashSet<string> Markers { get; } = new(StringComparer.Ordinal);
+    /// <summary>True where at least half of the cells that hold anything are numbers, or the usual marks beside numbers.</summary>
+    public bool IsNumeric => 2 * (numbers + marks) >= Count - blanks;
+
+    /// <summary>True where any cell is a number.</summary>
+    public bool HasNumbers => numbers > 0;
+
+    /// <summary>True where some text stands in it more than once.</summary>
+    public bool Repeats => distinct.Count < Count - blanks;
 
     /// <summary>Takes in a cell.</summary>
     public void Add(ReadOnlySpan<char> cell)
@@ -46,13 +52,6 @@ internal sealed class PeekColumn(string name)
 
         AddNumber(cell);
         AddText(cell);
-        foreach (var marker in UsualMarkers)
-        {
-            if (cell.SequenceEqual(marker))
-            {
-                Markers.Add(marker);
-            }
-        }
     }
 
     /// <summary>The column in a few words.</summary>
@@ -82,8 +81,11 @@ internal sealed class PeekColumn(string name)
             numbers++;
             lowest = Math.Min(lowest, number);
             highest = Math.Max(highest, number);
+            return;
         }
-        else if (odd.Length == 0)
+
+        marks += UsualMarks.IsMissing(cell) || UsualMarks.IsTrace(cell) ? 1 : 0;
+        if (odd.Length == 0)
         {
             odd = cell.ToString();
         }

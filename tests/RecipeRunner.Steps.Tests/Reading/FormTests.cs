@@ -50,6 +50,13 @@ public sealed class FormTests : IDisposable
     }
 
     [Fact]
+    public void A_first_row_that_ends_blank_has_its_last_column_all_the_same()
+    {
+        Read("2024-01-01,1,\n2024-01-02,2,3\n", RecordForm.Wide(time: 1, gauges: ["A", "B"])).SilentCount.ShouldBe(1);
+        Read("2024-01-01,\n2024-01-02,2\n", RecordForm.OneGauge(time: 1, value: 2)).SilentCount.ShouldBe(1);
+    }
+
+    [Fact]
     public void A_file_of_one_gauge_is_named_after_it()
     {
         bench.Write("Q-03.csv", "mm,date\n1,2024-01-01\n");

@@ -169,6 +169,23 @@ public sealed class LabelTests : IDisposable
     }
 
     [Fact]
+    public void A_span_that_no_record_has_is_refused_naming_both_lines()
+    {
+        // 300 years of minutes for eight gauges are more than a thousand million values.
+        bench.Write(
+            "rain.csv",
+            "time,A,B,C,D,E,F,G,H\n2024-01-01T00:01,1,1,1,1,1,1,1,1\n2324-01-01T00:01,1,1,1,1,1,1,1,1\n"
+        );
+        var problem = Bench.Refused(() =>
+            bench.Verbs.ReadRecords("rain.csv", RainUnit.Millimetres, TimeStep.Minutes(1))
+        )[0];
+
+        (problem.Code, problem.Where.Line).ShouldBe(("RR0266", 3));
+        problem.What.ShouldContain("2024-01-01T00:01 (line 2)");
+        problem.What.ShouldContain("2324-01-01T00:01 (line 3)");
+    }
+
+    [Fact]
     public void Intensities_become_depths_by_the_length_of_the_step()
     {
         bench.Write("rain.csv", "time,A\n2024-01-01T00:15,12\n");

@@ -31,6 +31,21 @@ public sealed class MarkTests : IDisposable
     }
 
     [Fact]
+    public void A_mark_that_is_zero_or_more_is_taken_before_the_depth_it_could_be()
+    {
+        bench.Write("rain.csv", "date,A\n2024-01-01,999\n2024-01-02,0\n2024-01-03,1\n");
+        var records = bench.Verbs.ReadRecords(
+            "rain.csv",
+            RainUnit.Millimetres,
+            TimeStep.Days("09:00"),
+            missing: ["999"],
+            trace: ["0.0"]
+        );
+
+        Statuses(records).ShouldBe("MTO");
+    }
+
+    [Fact]
     public void Rain_that_is_in_the_next_value_is_an_accumulation()
     {
         var records = Read("1", "A", "A", "6", "0", "A", "T", "2");

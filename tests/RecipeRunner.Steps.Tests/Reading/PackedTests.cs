@@ -18,8 +18,8 @@ public sealed class PackedTests : IDisposable
     public void A_packed_file_is_read_as_the_file_within()
     {
         var plain = Read("rain.csv", Encoding.UTF8.GetBytes(Text));
-        var packed = Read("rain.csv.gz", Pack(Text));
-        var members = Read("rain.csv.gz", [.. Pack(Text[..20]), .. Pack(Text[20..])]);
+        var packed = Read("rain.csv.gz", Gzip.Pack(Text));
+        var members = Read("rain.csv.gz", [.. Gzip.Pack(Text[..20]), .. Gzip.Pack(Text[20..])]);
 
         packed.Digest.ShouldBe(plain.Digest);
         members.Digest.ShouldBe(plain.Digest);
@@ -28,7 +28,7 @@ public sealed class PackedTests : IDisposable
     [Fact]
     public void Gauges_are_read_from_a_packed_table()
     {
-        bench.Write("gauges.csv.gz", Pack("id,x,y\nA,13.5,50.1\n"));
+        bench.Write("gauges.csv.gz", Gzip.Pack("id,x,y\nA,13.5,50.1\n"));
 
         bench
             .Verbs.ReadGauges("gauges.csv.gz", "id", "x", "y", crs: bench.Verbs.Crs("EPSG:4326"))
@@ -38,14 +38,14 @@ public sealed class PackedTests : IDisposable
     [Fact]
     public void A_cut_file_is_refused_wherever_it_was_cut()
     {
-        var whole = Pack(Text);
-        byte[] two = [.. Pack(Text[..20]), .. Pack(Text[20..])];
+        var whole = Gzip.Pack(Text);
+        byte[] two = [.. Gzip.Pack(Text[..20]), .. Gzip.Pack(Text[20..])];
         for (var length = 1; length < whole.Length; length++)
         {
             Code(whole[..length]).ShouldBe("RR0207", $"{length} bytes");
         }
 
-        for (var length = Pack(Text[..20]).Length + 1; length < two.Length; length++)
+        for (var length = Gzip.Pack(Text[..20]).Length + 1; length < two.Length; length++)
         {
             Code(two[..length]).ShouldBe("RR0207", $"{length} bytes of two members");
         }
@@ -54,7 +54,7 @@ public sealed class PackedTests : IDisposable
     [Fact]
     public void A_changed_byte_is_refused_or_changes_nothing()
     {
-        var whole = Pack(Text);
+        var whole = Gzip.Pack(Text);
         var digest = Read("rain.csv.gz", whole).Digest;
         for (var at = 0; at < whole.Length; at++)
         {
@@ -73,13 +73,13 @@ public sealed class PackedTests : IDisposable
     }
 
     [Fact]
-    public void What_follows_the_packed_text_is_damage() => Code([.. Pack(Text), 1, 2, 3]).ShouldBe("RR0207");
+    public void What_follows_the_packed_text_is_damage() => Code([.. Gzip.Pack(Text), 1, 2, 3]).ShouldBe("RR0207");
 
     [Fact]
     public void Problems_name_the_packed_file_and_the_line_within()
     {
-        bench.Write("rain.csv.gz", Pack("date,A\n2024-01-01,x\n"));
-        var problem = Bench.Refused(() => Read("rain.csv.gz", Pack("date,A\n2024-01-01,x\n")))[0];
+        bench.Write("rain.csv.gz", Gzip.Pack("date,A\n2024-01-01,x\n"));
+        var problem = Bench.Refused(() => Read("rain.csv.gz", Gzip.Pack("date,A\n2024-01-01,x\n")))[0];
 
         (problem.Where.File, problem.Where.Line).ShouldBe(("rain.csv.gz", 2));
     }
@@ -98,17 +98,6 @@ public sealed class PackedTests : IDisposable
         }
 
         Code(packed.ToArray()).ShouldBe("RR0208");
-    }
-
-    private static byte[] Pack(string text)
-    {
-        using var packed = new MemoryStream();
-        using (var packer = new GZipStream(packed, CompressionLevel.Optimal, leaveOpen: true))
-        {
-            packer.Write(Encoding.UTF8.GetBytes(text));
-        }
-
-        return packed.ToArray();
     }
 
     private string Code(byte[] bytes) => Bench.Refused(() => Read("rain.csv.gz", bytes))[0].Code;

@@ -11,6 +11,8 @@ internal readonly record struct Cell(double Depth, RecordStatus Status);
 /// <summary>Reads the cells of values: a depth, a mark, or a problem; a blank cell is missing.</summary>
 internal sealed class CellReader(string file, RainUnit unit, RecordMarks marks)
 {
+    private readonly bool isNeverMark = !marks.HasDepths;
+
     /// <summary>Reads a cell.</summary>
     /// <param name="cell">The text.</param>
     /// <param name="place">Line and column.</param>
@@ -26,7 +28,7 @@ internal sealed class CellReader(string file, RainUnit unit, RecordMarks marks)
         double hours,
         Problems problems
     ) =>
-        PlainNumber.TryRead(cell, out var number) && !marks.HasNumbers
+        PlainNumber.TryRead(cell, out var number) && (isNeverMark || marks.Of(number) is null)
             ? new Cell(unit.ToMillimetres(number, hours), RecordStatus.Observed)
             : ReadAny(cell.Trim(), place, gauge, hours, problems);
 

@@ -16,6 +16,9 @@ internal sealed class LongRows(string file, TimeStep step)
     private readonly RecordSpan span = new(file, step);
     private (string Id, int Gauge) latest = ("", -1);
 
+    /// <summary>True where nothing was taken in.</summary>
+    public bool IsEmpty => !span.HasRows;
+
     /// <summary>The index of a gauge, new or known.</summary>
     public int GaugeOf(ReadOnlySpan<char> id)
     {
@@ -107,6 +110,12 @@ internal sealed class LongRows(string file, TimeStep step)
                 LastStep = total.LastStep - span.Lowest,
             }
         );
+        foreach (var total in moved)
+        {
+            var at = (total.LastStep * ids.Length) + total.Gauge;
+            lines[at] = lines[at] > 0 ? lines[at] : total.Line;
+        }
+
         return new RecordPart(
             file,
             ids,

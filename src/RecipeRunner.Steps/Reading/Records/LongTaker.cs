@@ -68,7 +68,7 @@ internal sealed class LongTaker : IRowTaker
     private Cell ValueOf(SepReader.Row row, LocalDateTime label, string gauge, Problems problems)
     {
         var line = row.LineNumberFrom;
-        var hours = settings.Step.IntervalOf(label).Hours;
+        var hours = settings.HoursOf(label);
         var cell = cells.Read(row[layout.Value].Span, (line, layout.Value + 1), gauge, hours, problems);
         return layout.Flag < 0
             ? cell

@@ -1,4 +1,5 @@
 using nietras.SeparatedValues;
+using NodaTime;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
@@ -7,7 +8,11 @@ using RecipeRunner.Steps.Reading.Texts;
 namespace RecipeRunner.Steps.Reading.Records;
 
 /// <summary>How the recipe says that record files are to be read.</summary>
-internal sealed record RecordSettings(RainUnit Unit, TimeStep Step, RecordMarks Marks, RecordForm? Form);
+internal sealed record RecordSettings(RainUnit Unit, TimeStep Step, RecordMarks Marks, RecordForm? Form)
+{
+    /// <summary>How long a step is, where the unit is an intensity and must be multiplied by it.</summary>
+    public double HoursOf(LocalDateTime label) => Unit.IsIntensity ? Step.IntervalOf(label).Hours : 0;
+}
 
 /// <summary>Reads one record file, wide or long.</summary>
 internal sealed class RecordFile
@@ -57,7 +62,7 @@ internal sealed class RecordFile
                 taker = layout is null ? null : TakerOf(layout);
                 if (head is null && layout is not { HasHeader: false })
                 {
-                    head = CsvText.Cells(row);
+                    head = CsvText.WithoutEmptyEnd(CsvText.Cells(row));
                     continue;
                 }
             }
@@ -94,7 +99,7 @@ internal sealed class RecordFile
         }
 
         RecordLayout.RequireHeader(first, text.Name, labels);
-        CsvText.RequireDistinct(first, text.Name);
+        CsvText.RequireDistinct(CsvText.WithoutEmptyEnd(first), text.Name);
         return null;
     }
 
@@ -120,7 +125,7 @@ internal sealed class RecordFile
     {
         var cells = new CellReader(text.Name, settings.Unit, settings.Marks);
         return layout.Kind == RecordFormKind.Wide
-            ? new WideTaker(text.Name, settings.Step, layout, labels, cells, text.Lines - (layout.HasHeader ? 1 : 0))
+            ? new WideTaker(text.Name, settings, layout, labels, cells, text.Lines - (layout.HasHeader ? 1 : 0))
             : new LongTaker(text.Name, settings, layout, labels, cells);
     }
 

@@ -49,7 +49,7 @@ internal static class RecordFindings
 
     private static void TellOfImpossible(StepContext context, RainRecords records, RecordSurvey survey)
     {
-        foreach (var (t, g, limit) in survey.Impossible.Take(MostListed))
+        foreach (var (t, g, limit) in survey.Impossible)
         {
             context.Find(
                 Finding.Caution(
@@ -57,7 +57,7 @@ internal static class RecordFindings
                     new Place(records.Source, Item: $"gauge {records.GaugeIds[g]}"),
                     string.Create(
                         CultureInfo.InvariantCulture,
-                        $"{records.DepthsAt(t)[g]:0.#} mm on {records.Times.TextAt(t)} is more than was ever measured anywhere in a step of this length ({limit} mm). {survey.Impossible.Count} values are."
+                        $"{records.DepthsAt(t)[g]:0.#} mm on {records.Times.TextAt(t)} is more than was ever measured anywhere in a step of this length ({limit} mm). {survey.ImpossibleCount:N0} values are."
                     ),
                     "Is the unit right? Is it a total of several steps, or a marker of a missing value?"
                 )

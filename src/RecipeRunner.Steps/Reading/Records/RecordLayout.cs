@@ -44,8 +44,8 @@ internal sealed record RecordLayout(RecordFormKind Kind, bool HasHeader, int Wid
     /// <exception cref="RefusedException">The form does not fit the file.</exception>
     public static RecordLayout Of(RecordForm form, string[] first, string file, LabelReader labels)
     {
-        var columns = new ColumnFinder(file, first);
-        var time = form.Time.Columns.Select(columns.Find).ToArray();
+        var byName = form.Time.Columns.Any(column => column.Number == 0);
+        var time = form.Time.Columns.Select(new ColumnFinder(file, first).Find).ToArray();
         if (time.Length is 0 or > TimeCells.MostColumns)
         {
             throw Misfit(
@@ -55,8 +55,9 @@ internal sealed record RecordLayout(RecordFormKind Kind, bool HasHeader, int Wid
             );
         }
 
-        var byName = form.Time.Columns[0].Number == 0;
         var hasHeader = byName || !labels.LooksLikeTime(TimeCells.Of(first, time));
+        first = hasHeader ? CsvText.WithoutEmptyEnd(first) : first;
+        var columns = new ColumnFinder(file, first);
         var layout = new RecordLayout(form.Kind, hasHeader, first.Length, time);
         return form.Kind == RecordFormKind.Wide
             ? layout with

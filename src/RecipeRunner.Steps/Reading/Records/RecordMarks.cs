@@ -36,8 +36,8 @@ internal sealed class RecordMarks
     /// <summary>Marks that follow a number in its cell and say that it is estimated.</summary>
     public ImmutableArray<string> Suffixes { get; }
 
-    /// <summary>True where a number can be a mark.</summary>
-    public bool HasNumbers => numbers.Count > 0;
+    /// <summary>True where a number that could be a depth, zero or more, is a mark.</summary>
+    public bool HasDepths => numbers.Exists(mark => mark.Number >= 0);
 
     /// <summary>What a text means; null where it is no mark.</summary>
     public RecordStatus? Of(ReadOnlySpan<char> text) =>

@@ -42,19 +42,31 @@ internal sealed class RecordSpan(string file, TimeStep step)
             return 0;
         }
 
-        var (earliest, latest) = (
-            label < first.Label ? (label, line) : first,
-            label > last.Label ? (label, line) : last
-        );
-        if (IsAbsurd(earliest, latest, gauges, line, problems))
+        (LocalDateTime Label, int Line) here = (label, line);
+        var earliest = label < first.Label ? here : first;
+        var latest = label > last.Label ? here : last;
+        if (latest.Label.Year - earliest.Label.Year > LongestYears)
         {
+            AddAbsurd("RR0259", FormattableString.Invariant($"{LongestYears} years"), earliest, latest, line, problems);
             return null;
         }
 
-        (first, last) = (earliest, latest);
         var offset = step.StepsBetween(origin, label);
-        Lowest = Math.Min(Lowest, offset);
-        Highest = Math.Max(Highest, offset);
+        var (lowest, highest) = (Math.Min(Lowest, offset), Math.Max(Highest, offset));
+        if ((highest - lowest + 1L) * gauges > MostValues)
+        {
+            AddAbsurd(
+                "RR0266",
+                FormattableString.Invariant($"{MostValues:N0} values"),
+                earliest,
+                latest,
+                line,
+                problems
+            );
+            return null;
+        }
+
+        (first, last, Lowest, Highest) = (earliest, latest, lowest, highest);
         return offset;
     }
 
@@ -90,32 +102,20 @@ internal sealed class RecordSpan(string file, TimeStep step)
         }
     }
 
-    private bool IsAbsurd(
+    private void AddAbsurd(
+        string code,
+        string most,
         (LocalDateTime Label, int Line) earliest,
         (LocalDateTime Label, int Line) latest,
-        int gauges,
         int line,
         Problems problems
-    )
-    {
-        var years = latest.Label.Year - earliest.Label.Year;
-        if (
-            years <= LongestYears
-            && (years == 0 || (long)(step.StepsBetween(earliest.Label, latest.Label) + 1L) * gauges <= MostValues)
-        )
-        {
-            return false;
-        }
-
+    ) =>
         problems.Add(
-            years > LongestYears ? "RR0259" : "RR0266",
+            code,
             new Place(file, line),
-            string.Create(
-                CultureInfo.InvariantCulture,
-                $"Its times run from {step.LabelText(earliest.Label)} (line {earliest.Line}) to {step.LabelText(latest.Label)} (line {latest.Line}), {(years > LongestYears ? $"more than {LongestYears} years" : $"more than {MostValues:N0} values")}."
+            FormattableString.Invariant(
+                $"Its times run from {step.LabelText(earliest.Label)} (line {earliest.Line}) to {step.LabelText(latest.Label)} (line {latest.Line}), more than {most}."
             ),
             "Look for a year that was mistyped."
         );
-        return true;
-    }
 }

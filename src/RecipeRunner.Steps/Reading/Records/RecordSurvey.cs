@@ -5,7 +5,10 @@ namespace RecipeRunner.Steps.Reading.Records;
 /// <summary>What is to be said of records, gathered in one pass over their steps.</summary>
 internal sealed class RecordSurvey
 {
+    private const int MostKept = 5;
+
     private readonly int[] silentSince;
+    private int silent;
 
     private RecordSurvey(int gauges)
     {
@@ -15,8 +18,11 @@ internal sealed class RecordSurvey
         Failed = new int[gauges];
     }
 
-    /// <summary>Values beyond any that was ever measured in a step of their length, with that limit.</summary>
+    /// <summary>The first values beyond any that was ever measured in a step of their length, with that limit.</summary>
     public List<(int Step, int Gauge, double Limit)> Impossible { get; } = [];
+
+    /// <summary>How many there are.</summary>
+    public int ImpossibleCount { get; private set; }
 
     /// <summary>Runs of missing values of at least the length asked for, by their end, then gauge.</summary>
     public List<Silence> Silences { get; } = [];
@@ -54,24 +60,47 @@ internal sealed class RecordSurvey
         {
             if (depths[gauge] > limit && statuses[gauge] != RecordStatus.Failed)
             {
-                Impossible.Add((step, gauge, limit));
+                AddImpossible(step, gauge, limit);
             }
+        }
+    }
+
+    private void AddImpossible(int step, int gauge, double limit)
+    {
+        ImpossibleCount++;
+        if (Impossible.Count < MostKept)
+        {
+            Impossible.Add((step, gauge, limit));
         }
     }
 
     private void AddStatuses(int step, ReadOnlySpan<RecordStatus> statuses, int shortest)
     {
+        if (silent == 0 && !statuses.ContainsAnyExcept(RecordStatus.Observed))
+        {
+            return;
+        }
+
         for (var gauge = 0; gauge < statuses.Length; gauge++)
         {
             if (statuses[gauge] == RecordStatus.Missing)
             {
                 Missing[gauge]++;
-                silentSince[gauge] = silentSince[gauge] < 0 ? step : silentSince[gauge];
+                BeginSilence(gauge, step);
                 continue;
             }
 
             EndSilence(gauge, step, shortest);
             Failed[gauge] += statuses[gauge] == RecordStatus.Failed ? 1 : 0;
+        }
+    }
+
+    private void BeginSilence(int gauge, int step)
+    {
+        if (silentSince[gauge] < 0)
+        {
+            silentSince[gauge] = step;
+            silent++;
         }
     }
 
@@ -84,6 +113,7 @@ internal sealed class RecordSurvey
         }
 
         silentSince[gauge] = -1;
+        silent--;
         if (step - since >= shortest)
         {
             Silences.Add(new Silence(gauge, since, step - since));

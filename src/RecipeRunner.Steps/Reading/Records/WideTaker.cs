@@ -1,6 +1,5 @@
 using nietras.SeparatedValues;
 using RecipeRunner.Model.Steps;
-using RecipeRunner.Model.Time;
 
 namespace RecipeRunner.Steps.Reading.Records;
 
@@ -8,7 +7,7 @@ namespace RecipeRunner.Steps.Reading.Records;
 internal sealed class WideTaker : IRowTaker
 {
     private readonly string file;
-    private readonly TimeStep step;
+    private readonly RecordSettings settings;
     private readonly RecordLayout layout;
     private readonly LabelReader labels;
     private readonly CellReader cells;
@@ -17,13 +16,20 @@ internal sealed class WideTaker : IRowTaker
     private readonly int[] columns;
 
     /// <summary>Creates a taker.</summary>
-    public WideTaker(string file, TimeStep step, RecordLayout layout, LabelReader labels, CellReader cells, int rows)
+    public WideTaker(
+        string file,
+        RecordSettings settings,
+        RecordLayout layout,
+        LabelReader labels,
+        CellReader cells,
+        int rows
+    )
     {
-        (this.file, this.step, this.layout, this.labels, this.cells) = (file, step, layout, labels, cells);
+        (this.file, this.settings, this.layout, this.labels, this.cells) = (file, settings, layout, labels, cells);
         var gauges = layout.Gauges.OrderBy(gauge => gauge.Id, StringComparer.Ordinal).ToArray();
         ids = [.. gauges.Select(gauge => gauge.Id)];
         columns = [.. gauges.Select(gauge => gauge.Column)];
-        grid = new WideGrid(file, step, ids, Math.Max(1, rows));
+        grid = new WideGrid(file, settings.Step, ids, Math.Max(1, rows));
     }
 
     /// <inheritdoc/>
@@ -39,7 +45,7 @@ internal sealed class WideTaker : IRowTaker
             return;
         }
 
-        var hours = step.IntervalOf(label).Hours;
+        var hours = settings.HoursOf(label);
         for (var i = 0; i < columns.Length; i++)
         {
             var column = columns[i];

@@ -37,17 +37,17 @@ internal static class CsvText
             throw Empty(name);
         }
 
-        var names = Cells(reader.Current);
+        var names = WithoutEmptyEnd(Cells(reader.Current));
         RequireDistinct(names, name);
         return names;
     }
 
-    /// <summary>The cells of a row without the blanks around them; empty cells at the end are not counted.</summary>
-    public static string[] Cells(SepReader.Row row)
-    {
-        var cells = row[..].ToStringsArray().Select(column => column.Trim()).ToArray();
-        return cells[..(Array.FindLastIndex(cells, column => column.Length > 0) + 1)];
-    }
+    /// <summary>The cells of a row without the blanks around them.</summary>
+    public static string[] Cells(SepReader.Row row) => [.. row[..].ToStringsArray().Select(cell => cell.Trim())];
+
+    /// <summary>The cells up to the last that holds anything.</summary>
+    public static string[] WithoutEmptyEnd(string[] cells) =>
+        cells[..(Array.FindLastIndex(cells, cell => cell.Length > 0) + 1)];
 
     /// <summary>Refuses a header that names two columns alike.</summary>
     /// <exception cref="RefusedException">Two columns have one name.</exception>

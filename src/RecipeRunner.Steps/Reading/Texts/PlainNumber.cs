@@ -1,3 +1,5 @@
+using System.Runtime.CompilerServices;
+
 namespace RecipeRunner.Steps.Reading.Texts;
 
 /// <summary>
@@ -40,30 +42,38 @@ internal static class PlainNumber
         }
 
         long digits = 0;
-        var point = -1;
-        for (var i = 0; i < text.Length; i++)
+        var at = Digits(text, 0, ref digits);
+        if (at == text.Length)
         {
-            var digit = (uint)(text[i] - '0');
-            if (digit <= 9)
-            {
-                digits = (digits * 10) + digit;
-            }
-            else if (text[i] == '.' && point < 0)
-            {
-                point = i;
-            }
-            else
-            {
-                return false;
-            }
+            number = digits;
+            return true;
         }
 
-        if (point == 0 && text.Length == 1)
+        var decimals = text.Length - at - 1;
+        if (text[at] != '.' || text.Length == 1 || Digits(text, at + 1, ref digits) < text.Length)
         {
             return false;
         }
 
-        number = point < 0 ? digits : digits / Powers[text.Length - 1 - point];
+        number = digits / Powers[decimals];
         return true;
+    }
+
+    /// <summary>Reads digits from a place, and says where they end.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static int Digits(ReadOnlySpan<char> text, int at, ref long digits)
+    {
+        for (; at < text.Length; at++)
+        {
+            var digit = (uint)(text[at] - '0');
+            if (digit > 9)
+            {
+                break;
+            }
+
+            digits = (digits * 10) + digit;
+        }
+
+        return at;
     }
 }

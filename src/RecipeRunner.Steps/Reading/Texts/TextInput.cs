@@ -1,3 +1,4 @@
+using System.Text;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Steps.Reading.Texts;
@@ -8,13 +9,15 @@ namespace RecipeRunner.Steps.Reading.Texts;
 /// </summary>
 internal sealed class TextInput : IDisposable
 {
+    private const int BufferBytes = 1 << 16;
+
     private readonly Stream file;
 
     private TextInput(Stream file, string name)
     {
         this.file = file;
         Name = name;
-        Lines = Utf8Text.Require(Start(), name);
+        Lines = Utf8Text.Require(StartBytes(), name);
     }
 
     /// <summary>The file as the recipe names it.</summary>
@@ -31,11 +34,7 @@ internal sealed class TextInput : IDisposable
     public static TextInput Open(StepContext context, string name) => new(context.OpenInput(name), name);
 
     /// <summary>The text from its beginning; what was started before must not be read further.</summary>
-    public Stream Start()
-    {
-        file.Position = 0;
-        return IsPacked(Name) ? new UnpackedStream(file, Name) : file;
-    }
+    public StreamReader Start() => new(StartBytes(), Encoding.UTF8, bufferSize: BufferBytes, leaveOpen: true);
 
     /// <summary>The ending of a file's name in lower case, that of the text within where it is packed: <c>.csv</c> for <c>a.csv.gz</c>.</summary>
     public static string EndingOf(string name) => Path.GetExtension(WithoutGz(name)).ToLowerInvariant();
@@ -45,6 +44,12 @@ internal sealed class TextInput : IDisposable
 
     /// <inheritdoc/>
     public void Dispose() => file.Dispose();
+
+    private Stream StartBytes()
+    {
+        file.Position = 0;
+        return IsPacked(Name) ? new UnpackedStream(file, Name) : file;
+    }
 
     private static bool IsPacked(string name) => name.EndsWith(".gz", StringComparison.OrdinalIgnoreCase);
 

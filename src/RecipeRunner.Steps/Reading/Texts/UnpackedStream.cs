@@ -6,12 +6,12 @@ namespace RecipeRunner.Steps.Reading.Texts;
 
 /// <summary>
 /// Unpacks gzip (RFC 1952), one member or several, forward only. Damage is refused, and so is a file that swells beyond
-/// reason: past 256 MB to more than 250 times its packed size, which no record of rain does.
+/// reason: past 256 MB to more than 500 times its packed size, which no record of rain does.
 /// </summary>
 internal sealed class UnpackedStream : Stream
 {
     private const long FreeBytes = 256L << 20;
-    private const int MostTimes = 250;
+    private const int MostTimes = 500;
 
     private readonly Stream packed;
     private readonly GZipStream unpacker;
