@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using System.Globalization;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Space;
@@ -22,7 +23,9 @@ namespace RecipeRunner.Steps.Reading;
     "Read GHCN-Daily",
     Source = "Menne et al. 2012, doi:10.1175/JTECH-D-11-00103.1; NOAA GHCN-Daily readme.txt, section III"
 )]
-public sealed record ReadGhcnDailyStep(string File, TimeStep Step, GaugeNetwork? Gauges) : Step<RainRecords>
+public sealed record ReadGhcnDailyStep(string File, TimeStep Step, GaugeNetwork? Gauges)
+    : Step<RainRecords>,
+        IRecordStep
 {
     /// <inheritdoc/>
     public override RainRecords Execute(StepContext context)
@@ -60,6 +63,25 @@ public sealed record ReadGhcnDailyStep(string File, TimeStep Step, GaugeNetwork?
             "have a flag that says that there was nothing to measure (T or P), and yet a depth; they count as failed"
         );
         return RecordAssembly.Finish(context, parts, File);
+    }
+
+    /// <inheritdoc/>
+    public ImmutableArray<ValueOrigin> OriginsOf(RainRecords records, int gauge, int step, StepContext context)
+    {
+        var wanted = new HashSet<string>(StringComparer.Ordinal) { records.GaugeIds[gauge] };
+        var label = records.Times.LabelAt(step);
+        var origins = ImmutableArray.CreateBuilder<ValueOrigin>();
+        foreach (var name in context.FindInputs(File))
+        {
+            var (rows, _) = GhcnFile.Read(context, name, Step, wanted, new ObservationTimes());
+            var line = rows.IsEmpty ? 0 : rows.Finish().LineOf(records.GaugeIds[gauge], label);
+            if (line > 0)
+            {
+                origins.Add(GhcnFile.ValueAt(context, name, line, label.Day));
+            }
+        }
+
+        return origins.ToImmutable();
     }
 
     private void RequireDays()

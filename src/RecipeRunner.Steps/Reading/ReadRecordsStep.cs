@@ -3,6 +3,7 @@ using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
 using RecipeRunner.Steps.Reading.Records;
+using RecipeRunner.Steps.Reading.Texts;
 
 namespace RecipeRunner.Steps.Reading;
 
@@ -30,23 +31,41 @@ public sealed record ReadRecordsStep(
     ImmutableArray<string> Accumulating,
     ImmutableArray<string> Estimated,
     RecordForm? Form
-) : Step<RainRecords>
+) : Step<RainRecords>, IRecordStep
 {
     /// <inheritdoc/>
     public override RainRecords Execute(StepContext context)
     {
-        var marks = new RecordMarks(Missing, Trace, Accumulating, Estimated);
-        var settings = new RecordSettings(Unit, Step, marks, Form);
         var (parts, forms) = (new List<RecordPart>(), new List<string>());
         foreach (var name in context.FindInputs(File))
         {
-            var (part, form) = RecordFile.Read(context, name, settings);
+            var (part, layout) = RecordFile.Read(context, name, Settings());
             parts.Add(part);
-            forms.Add(form);
+            forms.Add(layout.Words);
         }
 
         context.State("form", string.Join("; ", forms.Distinct(StringComparer.Ordinal)));
         context.State("unit", Unit.Name);
         return RecordAssembly.Finish(context, parts, File);
     }
+
+    /// <inheritdoc/>
+    public ImmutableArray<ValueOrigin> OriginsOf(RainRecords records, int gauge, int step, StepContext context)
+    {
+        var origins = ImmutableArray.CreateBuilder<ValueOrigin>();
+        foreach (var name in context.FindInputs(File))
+        {
+            var (part, layout) = RecordFile.Read(context, name, Settings());
+            var line = part.LineOf(records.GaugeIds[gauge], records.Times.LabelAt(step));
+            if (line > 0)
+            {
+                origins.Add(SourceCell.At(context, name, line, layout.ColumnOf(records.GaugeIds[gauge])));
+            }
+        }
+
+        return origins.ToImmutable();
+    }
+
+    private RecordSettings Settings() =>
+        new(Unit, Step, new RecordMarks(Missing, Trace, Accumulating, Estimated), Form);
 }

@@ -41,6 +41,13 @@ internal static class DlyFile
         }
     }
 
+    /// <summary>The value of one day of a row, with its flags.</summary>
+    public static FileValue ValueOf(string row, Place place, int day)
+    {
+        var at = FirstValue + ((day - 1) * DayLength);
+        return new FileValue(place with { Column = at + 1 }, row.Substring(at, DayLength));
+    }
+
     private static void ReadRow(string row, int line, GhcnRows rows)
     {
         if (row.Length != RowLength)

@@ -41,6 +41,28 @@ internal static class GhcnFile
         return (rows, isFixed ? "GHCN-Daily, .dly" : "GHCN-Daily, a value a row");
     }
 
+    /// <summary>The value that stands on a line, with its flags.</summary>
+    /// <param name="context">Opens the file.</param>
+    /// <param name="name">The file.</param>
+    /// <param name="line">Its line.</param>
+    /// <param name="day">The day of the month, which tells the column of the fixed-width form.</param>
+    public static FileValue ValueAt(StepContext context, string name, int line, int day)
+    {
+        using var text = TextInput.Open(context, name);
+        if (!IsFixedWidth(text))
+        {
+            return SourceCell.At(context, name, line, column: 3);
+        }
+
+        using var reader = text.Start();
+        for (var before = 1; before < line; before++)
+        {
+            reader.ReadLine();
+        }
+
+        return DlyFile.ValueOf(reader.ReadLine()!, new Place(name, line), day);
+    }
+
     /// <summary>True where the first row is of one of the two forms.</summary>
     public static bool LooksLike(TextInput text) => FormOf(FirstRow(text)) is not null;
 

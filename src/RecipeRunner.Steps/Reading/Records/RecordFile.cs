@@ -33,13 +33,13 @@ internal sealed class RecordFile
 
     /// <summary>Reads a file.</summary>
     /// <exception cref="RefusedException">With every problem found.</exception>
-    public static (RecordPart Part, string Form) Read(StepContext context, string name, RecordSettings settings)
+    public static (RecordPart Part, RecordLayout Layout) Read(StepContext context, string name, RecordSettings settings)
     {
         using var input = TextInput.Open(context, name);
         return new RecordFile(input, context, settings).Read();
     }
 
-    private (RecordPart Part, string Form) Read()
+    private (RecordPart Part, RecordLayout Layout) Read()
     {
         using var reader = CsvText.Open(text);
         IRowTaker? taker = null;
@@ -86,7 +86,7 @@ internal sealed class RecordFile
 
         problems.ThrowIfAny();
         var part = taker.Finish(context, problems);
-        return (part, layout!.Words);
+        return (part, layout!);
     }
 
     /// <summary>The layout, where the recipe's form gives it with the first row.</summary>

@@ -27,6 +27,12 @@ internal sealed record RecordLayout(RecordFormKind Kind, bool HasHeader, int Wid
     /// <summary>The column of marks; -1 for none.</summary>
     public int Flag { get; init; } = -1;
 
+    /// <summary>The column of a gauge's values, from 0.</summary>
+    public int ColumnOf(string gauge) =>
+        Kind == RecordFormKind.Wide
+            ? Array.Find(Gauges, known => string.Equals(known.Id, gauge, StringComparison.Ordinal)).Column
+            : Value;
+
     /// <summary>The form in words.</summary>
     public string Words =>
         Kind switch

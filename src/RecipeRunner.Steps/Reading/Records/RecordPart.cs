@@ -1,3 +1,4 @@
+using NodaTime;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Time;
 
@@ -29,7 +30,17 @@ internal sealed record RecordPart(
     RecordStatus[] Statuses,
     List<SpanTotal> Totals,
     SourceLines Lines
-);
+)
+{
+    /// <summary>The line from which a value comes; 0 where the file has none.</summary>
+    /// <param name="gauge">The gauge's id.</param>
+    /// <param name="label">The label of the step.</param>
+    public int LineOf(string gauge, LocalDateTime label)
+    {
+        var column = Array.BinarySearch(GaugeIds, gauge, StringComparer.Ordinal);
+        return column >= 0 && Times.IndexOf(label) is { } step ? Lines.LineOf(step, column) : 0;
+    }
+}
 
 /// <summary>The lines of a file from which values come: a line a step where rows are wide, a line a value where they are long.</summary>
 /// <param name="Lines">Lines from 1; 0 where the file has none.</param>
