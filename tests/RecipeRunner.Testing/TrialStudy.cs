@@ -26,6 +26,9 @@ public sealed class TrialStudy(string dataFolder) : IStudy
     /// <summary>Titles and notes, in order.</summary>
     public List<string> Said { get; } = [];
 
+    /// <summary>The door of a step, for tests that open files again.</summary>
+    public StepContext Context => new TrialContext(this);
+
     /// <inheritdoc/>
     public T Run<T>(Step<T> step)
         where T : Artifact => Take(step.Execute(new TrialContext(this)));

@@ -41,7 +41,7 @@ public static class EmittedValues
     {
         while (reader.MoveNext())
         {
-            yield return (reader.Current.LineNumberFrom, reader.Current[..].ToStringsArray());
+            yield return (CsvText.LineOf(reader.Current), reader.Current[..].ToStringsArray());
         }
     }
 

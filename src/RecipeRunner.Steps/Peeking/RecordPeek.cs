@@ -45,7 +45,7 @@ internal sealed class RecordPeek(TextInput text, PeekColumn[] columns, PeekForm 
                 continue;
             }
 
-            times.Add(row.ColCount > form.Time ? row[form.Time].Span.Trim() : "", row.LineNumberFrom);
+            times.Add(row.ColCount > form.Time ? row[form.Time].Span.Trim() : "", CsvText.LineOf(row));
             if (form.Gauge >= 0 && row.ColCount > form.Gauge)
             {
                 gauges.Add(row[form.Gauge].Span.Trim().ToString());

@@ -73,7 +73,7 @@ internal sealed class RecordScan
         for (var i = 0; i < form.Values.Length && form.Values[i] < row.ColCount; i++)
         {
             var id = form.Gauge < 0 ? gauges[i] : row[form.Gauge].Span.Trim().ToString();
-            Take(row[form.Values[i]].Span.Trim(), gaugeAt[id], step, row.LineNumberFrom);
+            Take(row[form.Values[i]].Span.Trim(), gaugeAt[id], step, CsvText.LineOf(row));
         }
     }
 

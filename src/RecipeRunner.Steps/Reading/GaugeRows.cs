@@ -48,7 +48,7 @@ internal sealed record GaugeRows(ImmutableArray<GaugeRow> Rows, FeatureFile? Lay
         var rows = ImmutableArray.CreateBuilder<GaugeRow>();
         foreach (var row in reader)
         {
-            var place = new Place(step.File, row.LineNumberFrom);
+            var place = new Place(step.File, CsvText.LineOf(row));
             if (CsvText.IsBlank(row))
             {
                 continue;

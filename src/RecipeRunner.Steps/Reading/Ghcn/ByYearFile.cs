@@ -38,7 +38,7 @@ internal static class ByYearFile
 
     private static void ReadRow(SepReader.Row row, GhcnRows rows, ObservationTimes times)
     {
-        var line = row.LineNumberFrom;
+        var line = CsvText.LineOf(row);
         if (row.ColCount != Columns)
         {
             rows.Problems.Add(
@@ -72,7 +72,7 @@ internal static class ByYearFile
         ObservationTimes times
     )
     {
-        var line = row.LineNumberFrom;
+        var line = CsvText.LineOf(row);
         if (row[1].Span.Length != 8 || !TimeText.TryRead(row[1].Span, out var date) || date.Detail != TimeDetail.Date)
         {
             AddProblem(rows, line, 2, $"'{row[1].Span}' is not a date such as 20240131.");

@@ -31,7 +31,7 @@ internal sealed class LongTaker : IRowTaker
     /// <inheritdoc/>
     public void Take(SepReader.Row row, Problems problems)
     {
-        var line = row.LineNumberFrom;
+        var line = CsvText.LineOf(row);
         var id = layout.Gauge < 0 ? fileGauge : row[layout.Gauge].Span.Trim();
         if (id.IsEmpty)
         {
@@ -67,7 +67,7 @@ internal sealed class LongTaker : IRowTaker
 
     private Cell ValueOf(SepReader.Row row, LocalDateTime label, string gauge, Problems problems)
     {
-        var line = row.LineNumberFrom;
+        var line = CsvText.LineOf(row);
         var hours = settings.HoursOf(label);
         var cell = cells.Read(row[layout.Value].Span, (line, layout.Value + 1), gauge, hours, problems);
         return layout.Flag < 0
@@ -87,7 +87,7 @@ internal sealed class LongTaker : IRowTaker
         {
             problems.Add(
                 "RR0275",
-                new Place(file, row.LineNumberFrom, layout.Over + 1, $"gauge {gauge}"),
+                new Place(file, CsvText.LineOf(row), layout.Over + 1, $"gauge {gauge}"),
                 $"'{text}' is not a number of steps that a value covers.",
                 "Write 1, 2, 3 …, or leave it blank for one step."
             );

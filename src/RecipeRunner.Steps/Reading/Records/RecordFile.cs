@@ -129,7 +129,7 @@ internal sealed class RecordFile
             : new LongTaker(text.Name, settings, layout, labels, cells);
     }
 
-    private Place PlaceOf(SepReader.Row row) => new(text.Name, row.LineNumberFrom);
+    private Place PlaceOf(SepReader.Row row) => new(text.Name, CsvText.LineOf(row));
 }
 
 /// <summary>Takes the rows of a file in one form.</summary>

@@ -1,5 +1,6 @@
 using nietras.SeparatedValues;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Steps.Reading.Texts;
 
 namespace RecipeRunner.Steps.Reading.Records;
 
@@ -35,7 +36,7 @@ internal sealed class WideTaker : IRowTaker
     /// <inheritdoc/>
     public void Take(SepReader.Row row, Problems problems)
     {
-        var line = row.LineNumberFrom;
+        var line = CsvText.LineOf(row);
         var timeColumn = layout.Time[0] + 1;
         if (
             labels.Read(TimeCells.Of(row, layout.Time), line, timeColumn, problems) is not { } label

@@ -72,6 +72,9 @@ internal static class CsvText
         problems.ThrowIfAny();
     }
 
+    /// <summary>The line on which a row begins. The library counts the first row as if it stood on the second line.</summary>
+    public static int LineOf(SepReader.Row row) => row.RowIndex == 0 ? 1 : row.LineNumberFrom;
+
     /// <summary>True for an empty line, which says nothing.</summary>
     public static bool IsBlank(SepReader.Row row) => row.ColCount == 1 && row[0].Span.Trim().IsEmpty;
 

@@ -14,7 +14,7 @@ internal static class SourceCell
     {
         using var text = TextInput.Open(context, name);
         using var reader = CsvText.Open(text);
-        while (reader.MoveNext() && reader.Current.LineNumberFrom < line) { }
+        while (reader.MoveNext() && CsvText.LineOf(reader.Current) < line) { }
 
         return new FileValue(new Place(name, line, column + 1), reader.Current[column].ToString());
     }
