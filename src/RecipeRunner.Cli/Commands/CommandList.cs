@@ -37,6 +37,12 @@ internal static class CommandList
             )
             .WithExample("trace", "monthly-totals.study", "B-2", "2024-01-14");
         config
+            .AddCommand<CompareCommand>("compare")
+            .WithDescription(
+                "Say what changed from one study to another: inputs, settings, recipe, gauges, basins, weights, and why areal values did."
+            )
+            .WithExample("compare", "before.study", "after.study", "--table", "changes.csv");
+        config
             .AddCommand<StepsCommand>("steps")
             .WithDescription("List what a recipe can say, or show one verb or step with an example.")
             .WithExample("steps", "MeanRain");

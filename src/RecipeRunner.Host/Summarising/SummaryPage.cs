@@ -162,7 +162,8 @@ internal static class SummaryPage
         page.Element("p", $"Made with Recipe Runner {ToolVersion.Text}.");
     }
 
-    private static string Style()
+    /// <summary>The style of all pages.</summary>
+    internal static string Style()
     {
         using var stream = Assembly
             .GetExecutingAssembly()

@@ -1,0 +1,65 @@
+using System.Globalization;
+using NodaTime;
+using NodaTime.Text;
+
+namespace RecipeRunner.Host.Comparing;
+
+/// <summary>Changed areal values as rows for people and machines.</summary>
+public static class DifferenceTable
+{
+    private static readonly LocalDateTimePattern Time = LocalDateTimePattern.CreateWithInvariantCulture(
+        "uuuu'-'MM'-'dd'T'HH':'mm"
+    );
+
+    /// <summary>The columns: basin, step, values in mm, and the four parts, which add up to the difference.</summary>
+    public static IReadOnlyList<string> Heads { get; } =
+    [
+        "basin",
+        "step",
+        "was_mm",
+        "is_mm",
+        "difference_mm",
+        "by_settings_mm",
+        "by_weights_mm",
+        "by_reporting_mm",
+        "by_depths_mm",
+    ];
+
+    /// <summary>
+    /// One change as cells under <see cref="Heads"/>. The digits that are written add up as well: what rounding leaves over goes to
+    /// the largest part.
+    /// </summary>
+    public static IReadOnlyList<string> Row(RainChange change)
+    {
+        var (was, now) = (Written(change.WasMillimetres), Written(change.IsMillimetres));
+        decimal[] parts =
+        [
+            Written(change.BySettings),
+            Written(change.ByWeights),
+            Written(change.ByReporting),
+            Written(change.ByDepths),
+        ];
+        var largest = Array.IndexOf(parts, parts.MaxBy(Math.Abs));
+        parts[largest] += now - was - parts.Sum();
+        return
+        [
+            change.Basin,
+            Label(change.Label),
+            .. new[] { was, now, now - was }
+                .Concat(parts)
+                .Select(number => number.ToString("0.#########", CultureInfo.InvariantCulture)),
+        ];
+    }
+
+    /// <summary>All changes as lines of CSV (RFC 4180).</summary>
+    public static IEnumerable<string> Csv(StudyDifference difference) =>
+        difference.Rain.Select(change => string.Join(',', Row(change).Select(Quoted))).Prepend(string.Join(',', Heads));
+
+    private static string Label(LocalDateTime label) =>
+        label.TimeOfDay == LocalTime.Midnight ? LocalDatePattern.Iso.Format(label.Date) : Time.Format(label);
+
+    private static decimal Written(double number) => Math.Round((decimal)number, 9);
+
+    private static string Quoted(string text) =>
+        text.AsSpan().ContainsAny(",\"\n\r") ? $"\"{text.Replace("\"", "\"\"", StringComparison.Ordinal)}\"" : text;
+}
