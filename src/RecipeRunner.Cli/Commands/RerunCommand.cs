@@ -15,6 +15,14 @@ internal sealed class RerunCommand(Screen screen) : Command<RerunCommand.Options
         [Description("The study's folder.")]
         public required string Study { get; init; }
 
+        [CommandOption("--report <FILE>")]
+        [Description("Write the findings as one page for people to attach. The file may not exist yet.")]
+        public string? Report { get; init; }
+
+        [CommandOption("--json")]
+        [Description("Print the findings as JSON.")]
+        public bool Json { get; init; }
+
         [CommandOption("--details")]
         [Description("Show stack traces with errors.")]
         public bool Details { get; init; }
@@ -22,13 +30,13 @@ internal sealed class RerunCommand(Screen screen) : Command<RerunCommand.Options
 
     public override int Execute(CommandContext context, Options settings, CancellationToken cancellationToken)
     {
-        var printer = new RerunPrinter(screen);
         var code = ExitCode.Failed;
         var guarded = ErrorPrinter.Guard(
             screen,
             settings.Details,
             () =>
             {
+                NewFile.Require(settings.Report);
                 var report = StudyRerun.Of(
                     settings.Study,
                     Kitchen.Language,
@@ -36,11 +44,24 @@ internal sealed class RerunCommand(Screen screen) : Command<RerunCommand.Options
                     new QuietObserver(screen),
                     cancellationToken
                 );
-                printer.Print(report, settings.Study);
+                Print(report, settings);
+                NewFile.Write(settings.Report, () => RerunDocument.Page(report, settings.Study));
                 code = ExitCode.Of(report.Verdict);
             },
             screen.ClearStatus
         );
         return guarded == ExitCode.Done ? code : guarded;
+    }
+
+    private void Print(RerunReport report, Options settings)
+    {
+        if (settings.Json)
+        {
+            screen.Line(RerunDocument.Json(report, settings.Study));
+        }
+        else
+        {
+            RerunPrinter.Print(screen, report, settings.Study);
+        }
     }
 }

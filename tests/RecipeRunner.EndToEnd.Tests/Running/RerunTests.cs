@@ -38,7 +38,7 @@ public sealed class RerunTests(DemoStudy demo) : IClassFixture<DemoStudy>
 
         said.ExitCode.ShouldBe(6);
         said.Output.ShouldStartWith("CANNOT RERUN");
-        said.Output.ShouldContain($"RR0804  {file}:");
+        said.Output.ShouldContain($"RR0804   {file}:");
     }
 
     [Fact]
@@ -55,9 +55,13 @@ public sealed class RerunTests(DemoStudy demo) : IClassFixture<DemoStudy>
         File.WriteAllText(path, string.Join('\n', lines) + "\n");
         SealAgain(study);
 
-        var said = tool.Run("rerun", study);
+        var said = tool.Run("rerun", study, "--report", "report.html");
 
         said.ExitCode.ShouldBe(5);
+        File.ReadAllText(tool.PathOf("report.html")).ShouldContain("holds 999.5");
+        using var json = System.Text.Json.JsonDocument.Parse(tool.Run("rerun", study, "--json").Output);
+        json.RootElement.GetProperty("verdict").GetString().ShouldBe("differs");
+        json.RootElement.GetProperty("worst")[0].GetProperty("was").GetString().ShouldBe("999.5");
         said.Output.ShouldStartWith("DIFFERS");
         said.Output.ShouldContain($"tables/rain-by-month.csv, line 5 (2023-01), B-2: holds 999.5, reruns to {was}");
     }
