@@ -16,13 +16,19 @@ internal sealed class TraceCommand(Screen screen) : Command<TraceCommand.Options
         [Description("The study's folder.")]
         public required string Study { get; init; }
 
-        [CommandArgument(1, "<BASIN>")]
-        [Description("The basin's id.")]
+        [CommandArgument(1, "<BASIN-OR-TABLE>")]
+        [Description("The basin's id; or, with three words, a table's name.")]
         public required string Basin { get; init; }
 
-        [CommandArgument(2, "<TIME>")]
-        [Description("The step of time as the tables name it, such as 2024-01-14.")]
+        [CommandArgument(2, "<TIME-OR-ROW>")]
+        [Description(
+            "The step of time as the tables name it, such as 2024-01-14; or a row of the table: its line in the file, or its first cell."
+        )]
         public required string Time { get; init; }
+
+        [CommandArgument(3, "[COLUMN]")]
+        [Description("A column of the table.")]
+        public string? Column { get; init; }
 
         [CommandOption("--step <NUMBER>")]
         [Description("The step that gave the series, where the study has several. Default: the first.")]
@@ -50,7 +56,17 @@ internal sealed class TraceCommand(Screen screen) : Command<TraceCommand.Options
             () =>
             {
                 using var replay = StudyReplay.Of(settings.Study, Kitchen.Language, observer, cancellationToken);
-                var trace = new StudyTrace(replay, cancellationToken).Of(settings.Basin, settings.Time, settings.Step);
+                var cell = settings.Column is { } column
+                    ? new TableTrace(replay).Of(settings.Basin, settings.Time, column)
+                    : null;
+                var areal = cell is null ? (settings.Basin, settings.Time, settings.Step) : cell.Areal;
+                if (areal is not { } value)
+                {
+                    TraceText.Of(cell!).ToList().ForEach(screen.Line);
+                    return;
+                }
+
+                var trace = new StudyTrace(replay, cancellationToken).Of(value.Item1, value.Item2, value.Item3);
                 foreach (var line in Lines(trace, settings))
                 {
                     screen.Line(line);

@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using System.Globalization;
 using RecipeRunner.Host.Running;
 using RecipeRunner.Host.Tracing;
@@ -11,7 +12,19 @@ internal static class TraceText
     private const int MostCells = 3;
 
     public static IEnumerable<string> Of(ValueTrace trace) =>
-        [Heading(trace), "", .. Table(trace), .. Silent(trace), "", .. Steps(trace), "", .. Origins(trace)];
+        [Heading(trace), "", .. Table(trace), .. Silent(trace), "", .. Steps(trace.Steps), "", .. Origins(trace)];
+
+    /// <summary>A cell of a table: its value and meaning, then the steps behind it.</summary>
+    public static IEnumerable<string> Of(CellTrace cell) =>
+        [
+            Text(
+                    $"{cell.File}, line {cell.Line} ({cell.Row}), {cell.Column}: {(cell.Text.Length == 0 ? "blank" : cell.Text)} {cell.Unit}"
+                )
+                .TrimEnd(),
+            $"  {cell.Meaning}",
+            "",
+            .. Steps(cell.Steps),
+        ];
 
     private static string Heading(ValueTrace trace)
     {
@@ -50,8 +63,8 @@ internal static class TraceText
             )
         );
 
-    private static IEnumerable<string> Steps(ValueTrace trace) =>
-        trace.Steps.Select(entry =>
+    private static IEnumerable<string> Steps(ImmutableArray<JournalEntry> steps) =>
+        steps.Select(entry =>
             $"  step {Number(entry), -3} {entry.Title, -22} {entry.Line}   {Settings(entry)}".TrimEnd()
         );
 

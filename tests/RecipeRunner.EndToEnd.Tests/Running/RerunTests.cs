@@ -119,6 +119,23 @@ public sealed class RerunTests(DemoStudy demo) : IClassFixture<DemoStudy>
         demo.Tool.Run("trace", demo.Folder, "B-2", "2024-01-14", "--json").Output.ShouldContain("\"column\": 9");
     }
 
+    [Fact]
+    public void A_cell_of_any_table_is_traced()
+    {
+        var month = demo.Tool.Run("trace", demo.Folder, "rain-by-month", "2023-01", "B-2");
+        month.ExitCode.ShouldBe(0, month.Errors);
+        month.Output.ShouldStartWith("tables/rain-by-month.csv, line 5 (2023-01), B-2: ");
+        month.Output.ShouldContain("Total areal rainfall of Lower Quell");
+        month.Output.ShouldContain("Mean rain");
+
+        var day = demo.Tool.Run("trace", demo.Folder, "B-2", "2024-01-14").Output;
+        demo.Tool.Run("trace", demo.Folder, "tables/areal-rainfall.csv", "472", "B-2").Output.ShouldBe(day);
+        demo.Tool.Run("trace", demo.Folder, "areal-rainfall", "2024-01-13T09:00", "B-2").Output.ShouldBe(day);
+        demo.Tool.Run("trace", demo.Folder, "weights", "B-2", "weight").Errors.ShouldContain("RR0826");
+        demo.Tool.Run("trace", demo.Folder, "rain-by-mont", "2", "B-2").Errors.ShouldContain("Did you mean");
+        demo.Tool.Run("trace", demo.Folder, "rain-by-month", "2", "B-22").Errors.ShouldContain("RR0825");
+    }
+
     [Theory]
     [InlineData("B-9", "2024-01-14", "RR0822")]
     [InlineData("B-2", "2034-01-14", "RR0823")]
