@@ -8,6 +8,8 @@ namespace RecipeRunner.Cli.Printing;
 internal static class DifferenceText
 {
     private const int Most = 8;
+    private const int TextShown = 70;
+    private const int DigestShown = 12;
 
     public static IEnumerable<string> Of(StudyDifference difference, string was, string now) =>
         difference.IsEmpty
@@ -16,7 +18,7 @@ internal static class DifferenceText
             [
                 $"DIFFERENT      {was} and {now}",
                 .. Lines("tool", difference.Tools),
-                .. Lines("input", difference.Inputs),
+                .. Lines("input", difference.Inputs, DigestShown),
                 .. Lines("setting", difference.Settings),
                 .. Lines("recipe", difference.RecipeLines),
                 .. Lines("gauge", difference.Gauges),
@@ -26,11 +28,11 @@ internal static class DifferenceText
                 .. Worst(difference),
             ];
 
-    private static IEnumerable<string> Lines(string word, ImmutableArray<Change> changes)
+    private static IEnumerable<string> Lines(string word, ImmutableArray<Change> changes, int length = TextShown)
     {
         foreach (var change in changes.Take(Most))
         {
-            yield return $"  {word, -8} {change.Name}: {Text(change.Was)} -> {Text(change.Is)}";
+            yield return $"  {word, -8} {change.Name}: {Text(change.Was, length)} -> {Text(change.Is, length)}";
         }
 
         if (changes.Length > Most)
@@ -49,8 +51,8 @@ internal static class DifferenceText
                 return $"  {"largest", -8} {cells[0]} {cells[1]}: {cells[2]} -> {cells[3]} mm; settings {cells[5]}, weights {cells[6]}, gauges reporting {cells[7]}, depths {cells[8]}";
             });
 
-    private static string Text(string text) =>
+    private static string Text(string text, int length) =>
         text.Length == 0 ? "nothing"
-        : text.Length > 70 ? text[..70] + "…"
+        : text.Length > length ? text[..length] + "…"
         : text;
 }
