@@ -35,6 +35,7 @@ public sealed record ReadRecordsStep(
     /// <inheritdoc/>
     public override RainRecords Execute(StepContext context)
     {
+        RequireDepthsOfTotals();
         var marks = new RecordMarks(Missing, Trace, Accumulating, Estimated);
         var settings = new RecordSettings(Unit, Step, marks, Form);
         var (parts, forms) = (new List<RecordPart>(), new List<string>());
@@ -48,5 +49,25 @@ public sealed record ReadRecordsStep(
         context.State("form", string.Join("; ", forms.Distinct(StringComparer.Ordinal)));
         context.State("unit", Unit.Name);
         return RecordAssembly.Finish(context, parts, File);
+    }
+
+    /// <summary>A mean intensity says nothing of the steps before its own, so it cannot be what fell over several.</summary>
+    private void RequireDepthsOfTotals()
+    {
+        var isTotal =
+            !Accumulating.IsEmpty
+            || Form is { Over: not null }
+            || (Form?.Flags.Any(flag => flag.Meaning == RecordStatus.Accumulated) ?? false);
+        if (Unit.IsIntensity && isTotal)
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0289",
+                    new Place(File),
+                    $"Totals of several steps cannot be read as intensities ({Unit.Name}).",
+                    "Give depths where rain accumulates over steps, or read without accumulating:, over: and Flag.Accumulating."
+                )
+            );
+        }
     }
 }
