@@ -12,7 +12,7 @@ internal sealed class PeekCommand(Screen screen) : Command<PeekCommand.Options>
     public sealed class Options : CommandSettings
     {
         [CommandArgument(0, "<FILE>")]
-        [Description("A shapefile, GeoJSON or CSV file.")]
+        [Description("A shapefile, GeoJSON, CSV or GHCN-Daily file, plain or packed (.gz).")]
         public required string File { get; init; }
     }
 

@@ -31,11 +31,12 @@ public static class StudyFacts
         if (series.Length > 0)
         {
             var (given, withheld) = (series.Sum(areal => areal.Count), series.Sum(areal => areal.WithheldCount));
+            var longest = series.MaxBy(areal => areal.Times.Count)!.Times;
             yield return (
                 "time",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{series.Max(areal => areal.Times.Count):N0} {series[0].Times.Step.ToSettingText()}{(series.Length > 1 ? $", {series.Length} series" : "")}"
+                    $"{longest.Step.Words(longest.Count)}{(series.Length > 1 ? $", {series.Length} series" : "")}"
                 )
             );
             yield return (

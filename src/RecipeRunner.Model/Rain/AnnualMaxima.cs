@@ -3,6 +3,7 @@ using System.Globalization;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Rain;
 
@@ -110,8 +111,8 @@ public sealed class AnnualMaxima : Artifact, IShownTable
                 "weight_least",
                 "",
                 12,
-                "The least share of the basin's weight in the full network that reported at one of these steps",
-                Maxima.Select(row => (double?)row.LeastWeightReporting)
+                "The least share of the basin's weight in the full network that reported at one of these steps; blank where none was found",
+                Maxima.Select(row => row.FirstStep < 0 ? null : (double?)row.LeastWeightReporting)
             ),
             Column.OfCounts(
                 "steps_with_value",
@@ -134,7 +135,7 @@ public sealed class AnnualMaxima : Artifact, IShownTable
         var years = Maxima.Where(row => row.Basin == 0 && row.DurationSteps == Maxima[0].DurationSteps).ToArray();
         return string.Create(
             CultureInfo.InvariantCulture,
-            $"{Maxima.Length:N0} maxima, {years.Count(row => row.Complete):N0} of {years.Length:N0} years complete in {Areal.Basins.Basins[0].Id}"
+            $"{Counted.Of(Maxima.Length, "maximum", "maxima")}, {years.Count(row => row.Complete):N0} of {Counted.Of(years.Length, "year")} complete in {Areal.Basins.Basins[0].Id}"
         );
     }
 

@@ -2,6 +2,7 @@ using System.Globalization;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Rain;
 
@@ -59,7 +60,7 @@ public sealed class ArealRainfall : Artifact, ITabular
     public override string Describe() =>
         string.Create(
             CultureInfo.InvariantCulture,
-            $"{Basins.Basins.Length:N0} basins x {Times.Count:N0} steps, {WithheldCount:N0} withheld"
+            $"{Counted.Of(Basins.Basins.Length, "basin")} x {Counted.Of(Times.Count, "step")}, {WithheldCount:N0} withheld"
         );
 
     /// <inheritdoc/>

@@ -4,6 +4,7 @@ using NodaTime;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Rain;
 
@@ -79,7 +80,7 @@ public sealed class ArealTotals : Artifact, ITabular
     public override string Describe() =>
         string.Create(
             CultureInfo.InvariantCulture,
-            $"{Basins.Basins.Length:N0} basins x {Starts.Length:N0} periods, {totals.Count(t => t.DepthMillimetres is null):N0} withheld"
+            $"{Counted.Of(Basins.Basins.Length, "basin")} x {Counted.Of(Starts.Length, "period")}, {totals.Count(t => t.DepthMillimetres is null):N0} withheld"
         );
 
     /// <inheritdoc/>

@@ -1,6 +1,6 @@
-using System.Globalization;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Rain;
 
@@ -53,8 +53,8 @@ public sealed class CompletenessTable : Artifact, ITabular
                 "weight_mean",
                 "",
                 12,
-                "The mean share of the basin's weight in the full network that reported at those steps",
-                rows.Select(row => (double?)row.Total.MeanWeightReporting)
+                "The mean share of the basin's weight in the full network that reported at those steps; blank where there are none",
+                rows.Select(row => row.Total.StepsWithValue == 0 ? null : (double?)row.Total.MeanWeightReporting)
             ),
             Column.OfNumbers(
                 "total_mm",
@@ -67,8 +67,7 @@ public sealed class CompletenessTable : Artifact, ITabular
     }
 
     /// <inheritdoc/>
-    public override string Describe() =>
-        string.Create(CultureInfo.InvariantCulture, $"{Totals.Basins.Basins.Length * Totals.Starts.Length:N0} totals");
+    public override string Describe() => Counted.Of(Totals.Basins.Basins.Length * Totals.Starts.Length, "total");
 
     /// <inheritdoc/>
     protected override void WriteCanonical(CanonicalWriter writer) => writer.Write(Totals);

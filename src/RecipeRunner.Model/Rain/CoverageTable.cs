@@ -1,6 +1,7 @@
 using System.Globalization;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Rain;
 
@@ -60,7 +61,10 @@ public sealed class CoverageTable : Artifact, ITabular
 
     /// <inheritdoc/>
     public override string Describe() =>
-        string.Create(CultureInfo.InvariantCulture, $"{Areal.Count:N0} values, {Areal.WithheldCount:N0} withheld");
+        string.Create(
+            CultureInfo.InvariantCulture,
+            $"{Counted.Of(Areal.Count, "value")}, {Areal.WithheldCount:N0} withheld"
+        );
 
     /// <inheritdoc/>
     protected override void WriteCanonical(CanonicalWriter writer) => writer.Write(Areal);

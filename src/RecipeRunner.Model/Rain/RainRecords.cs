@@ -3,6 +3,7 @@ using System.Globalization;
 using System.Runtime.InteropServices;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Rain;
 
@@ -126,7 +127,7 @@ public sealed class RainRecords : Artifact
         var silent = statuses.Length == 0 ? 0 : 100.0 * SilentCount / statuses.Length;
         return string.Create(
             CultureInfo.InvariantCulture,
-            $"{GaugeIds.Length:N0} gauge{(GaugeIds.Length == 1 ? "" : "s")}, {Times.Count:N0} {Times.Step.ToSettingText()}, {silent:0.0} % without a value"
+            $"{Counted.Of(GaugeIds.Length, "gauge")}, {Times.Step.Words(Times.Count)}, {silent:0.0} % without a value"
         );
     }
 

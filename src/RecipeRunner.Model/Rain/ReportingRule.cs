@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using System.Globalization;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Rain;
 
@@ -85,20 +86,22 @@ public sealed record GaugeCountRule : ReportingRule
     public override bool IsMetBy(int gauges, double share, double nearestMetres) => gauges >= Count;
 
     /// <inheritdoc/>
-    public override string ToSettingText() =>
-        string.Create(CultureInfo.InvariantCulture, $"at least {Count} gauge{(Count == 1 ? "" : "s")}");
+    public override string ToSettingText() => $"at least {Counted.Of(Count, "gauge")}";
 }
 
 /// <summary>A distance.</summary>
 public sealed record DistanceRule : ReportingRule
 {
+    /// <summary>Less than the lattice of coordinates: kilometres times a thousand, and roots, are a little off.</summary>
+    private const double LastBits = 1e-6;
+
     internal DistanceRule(double metres) => Metres = metres;
 
     /// <summary>The largest distance in metres, 0 or more.</summary>
     public double Metres { get; }
 
     /// <inheritdoc/>
-    public override bool IsMetBy(int gauges, double share, double nearestMetres) => nearestMetres <= Metres;
+    public override bool IsMetBy(int gauges, double share, double nearestMetres) => nearestMetres <= Metres + LastBits;
 
     /// <inheritdoc/>
     public override string ToSettingText() =>
@@ -117,8 +120,7 @@ public sealed record StepCountRule : ICompletenessRule
     public bool IsMetBy(int present, int expected) => present >= Math.Min(Count, expected);
 
     /// <inheritdoc/>
-    public string ToSettingText() =>
-        string.Create(CultureInfo.InvariantCulture, $"at least {Count} step{(Count == 1 ? "" : "s")}");
+    public string ToSettingText() => $"at least {Counted.Of(Count, "step")}";
 
     /// <inheritdoc/>
     public override string ToString() => ToSettingText();

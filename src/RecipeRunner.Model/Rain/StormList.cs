@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using System.Globalization;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Rain;
 
@@ -104,7 +105,7 @@ public sealed class StormList : Artifact, IShownTable
     public override string Describe() =>
         string.Create(
             CultureInfo.InvariantCulture,
-            $"{Storms.Length:N0} storms over {Areal.Basins.Basins.Length:N0} basins"
+            $"{Counted.Of(Storms.Length, "storm")} over {Counted.Of(Areal.Basins.Basins.Length, "basin")}"
         );
 
     /// <inheritdoc/>

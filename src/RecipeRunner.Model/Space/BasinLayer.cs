@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using System.Globalization;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Space;
 
@@ -79,7 +80,7 @@ public sealed class BasinLayer : Artifact, IMapLayer
     /// <inheritdoc/>
     public override string Describe()
     {
-        var count = string.Create(CultureInfo.InvariantCulture, $"{Basins.Length:N0} basins");
+        var count = Counted.Of(Basins.Length, "basin");
         return ReferenceSystem.Kind == ReferenceSystemKind.Projected
             ? string.Create(
                 CultureInfo.InvariantCulture,

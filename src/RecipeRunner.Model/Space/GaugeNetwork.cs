@@ -1,6 +1,6 @@
 using System.Collections.Immutable;
-using System.Globalization;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Space;
 
@@ -60,8 +60,7 @@ public sealed class GaugeNetwork : Artifact, IMapLayer
     }
 
     /// <inheritdoc/>
-    public override string Describe() =>
-        string.Create(CultureInfo.InvariantCulture, $"{Gauges.Length:N0} gauges, {ReferenceSystem.Label}");
+    public override string Describe() => $"{Counted.Of(Gauges.Length, "gauge")}, {ReferenceSystem.Label}";
 
     /// <inheritdoc/>
     protected override void WriteCanonical(CanonicalWriter writer)

@@ -1,5 +1,5 @@
-using System.Globalization;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Space;
 
@@ -24,7 +24,7 @@ public sealed class ResultTable : Artifact, IShownTable
     public Table ToTable() => table;
 
     /// <inheritdoc/>
-    public override string Describe() => string.Create(CultureInfo.InvariantCulture, $"{table.RowCount:N0} rows");
+    public override string Describe() => Counted.Of(table.RowCount, "row");
 
     /// <inheritdoc/>
     protected override void WriteCanonical(CanonicalWriter writer)

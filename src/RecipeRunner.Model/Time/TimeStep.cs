@@ -1,6 +1,7 @@
 using NodaTime;
 using NodaTime.Text;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Time;
 
@@ -88,6 +89,14 @@ public abstract record TimeStep : ISettingValue
 
     /// <summary>The step in words, such as <c>days ending 09:00</c>.</summary>
     public abstract string ToSettingText();
+
+    /// <summary>A number of steps in words, such as <c>1 day ending 09:00</c>, <c>24 hours</c>.</summary>
+    /// <param name="count">How many.</param>
+    public string Words(int count)
+    {
+        var many = ToSettingText();
+        return Counted.Of(count, many.Remove($"{many} ".IndexOf("s ", StringComparison.Ordinal), 1), many);
+    }
 
     /// <inheritdoc/>
     public sealed override string ToString() => ToSettingText();

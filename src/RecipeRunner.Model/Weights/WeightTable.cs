@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using System.Globalization;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Model.Weights;
 
@@ -58,7 +59,10 @@ public sealed class WeightTable : Artifact, ITabular
 
     /// <inheritdoc/>
     public override string Describe() =>
-        string.Create(CultureInfo.InvariantCulture, $"{Basins.Basins.Length:N0} basins, {Weights.Length:N0} weights");
+        string.Create(
+            CultureInfo.InvariantCulture,
+            $"{Counted.Of(Basins.Basins.Length, "basin")}, {Counted.Of(Weights.Length, "weight")}"
+        );
 
     /// <inheritdoc/>
     protected override void WriteCanonical(CanonicalWriter writer)

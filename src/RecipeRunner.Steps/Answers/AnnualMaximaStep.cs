@@ -42,6 +42,7 @@ public sealed record AnnualMaximaStep(
         var result = new AnnualMaxima(Areal, Years, [.. maxima]);
         context.Assume("A maximum over several steps counts for the year that holds the last of them.");
         TellOfYears(context, result, years.Length);
+        TellOfNoRun(context, result);
         return result;
     }
 
@@ -113,12 +114,34 @@ public sealed record AnnualMaximaStep(
         );
     }
 
+    private bool HasEnough(AnnualMaximum row) => Complete.IsMetBy(row.StepsWithValue, row.StepsExpected);
+
+    /// <summary>Years that are complete enough, and yet have no run of so many steps that all have a value.</summary>
+    private void TellOfNoRun(StepContext context, AnnualMaxima maxima)
+    {
+        var without = maxima
+            .Maxima.Where(row => row.LargestMillimetres is null && HasEnough(row))
+            .Select(row => $"{Areal.Basins.Basins[row.Basin].Id} {row.Year} ({Counted.Of(row.DurationSteps, "step")})")
+            .ToArray();
+        if (without.Length > 0)
+        {
+            context.Find(
+                Finding.Notice(
+                    "RR0552",
+                    Place.Of("annual maxima"),
+                    $"No maximum, because nowhere do so many steps on end have a value: {Listing.Of(without)}.",
+                    "Ask for shorter durations, or for more gauges to report."
+                )
+            );
+        }
+    }
+
     private void TellOfYears(StepContext context, AnnualMaxima maxima, int years)
     {
         var counts = maxima
             .Maxima.Where(row => row.DurationSteps == Durations[0])
             .GroupBy(row => row.Basin)
-            .Select(basin => (Areal.Basins.Basins[basin.Key].Id, Complete: basin.Count(row => row.Complete)))
+            .Select(basin => (Areal.Basins.Basins[basin.Key].Id, Complete: basin.Count(HasEnough)))
             .ToArray();
         context.State(
             "complete years",
@@ -139,7 +162,7 @@ public sealed record AnnualMaximaStep(
                     Place.Of("annual maxima"),
                     string.Create(
                         CultureInfo.InvariantCulture,
-                        $"Of {years} years some are left without a maximum, because {Complete.ToSettingText()} of their steps must have a value: {Listing.Of(lacking)}."
+                        $"Of {Counted.Of(years, "year")} some are left without a maximum, because too few of their steps have a value ({Complete.ToSettingText()} must): {Listing.Of(lacking)}."
                     ),
                     "largest_found_mm still gives the largest that was found; the true maximum is no smaller."
                 )

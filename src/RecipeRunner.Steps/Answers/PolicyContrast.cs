@@ -8,7 +8,7 @@ namespace RecipeRunner.Steps.Answers;
 /// <summary>How far the gap policies part in one basin and season.</summary>
 internal sealed record PolicyContrast
 {
-    private const string Both = "over the steps at which Redraw and Rescale have a value";
+    private const string Both = "over the steps at which Redraw and Rescale have a value; blank where there are none";
 
     /// <summary>Index of the basin.</summary>
     public required int Basin { get; init; }
@@ -27,6 +27,9 @@ internal sealed record PolicyContrast
 
     /// <summary>Steps with a value under Rescale.</summary>
     public required int RescaleGiven { get; init; }
+
+    /// <summary>Steps with a value under both of them.</summary>
+    public required int Shared { get; init; }
 
     /// <summary>Millimetres under Redraw, where both have a value.</summary>
     public required double RedrawSum { get; init; }
@@ -51,7 +54,7 @@ internal sealed record PolicyContrast
             default(CompensatedSum),
             default(CompensatedSum)
         );
-        var (largest, largestStep) = (0.0, -1);
+        var (largest, largestStep, shared) = (0.0, -1, 0);
         foreach (var t in steps)
         {
             if (
@@ -62,6 +65,7 @@ internal sealed record PolicyContrast
                 continue;
             }
 
+            shared++;
             redrawSum.Add(drawn);
             rescaleSum.Add(scaled);
             completeSum.Add(redraw.At(t, basin).Status == ArealStatus.Complete ? drawn : 0);
@@ -77,6 +81,7 @@ internal sealed record PolicyContrast
             Complete = steps.Count(t => redraw.At(t, basin).Status == ArealStatus.Complete),
             RedrawGiven = steps.Count(t => redraw.At(t, basin).Status != ArealStatus.Withheld),
             RescaleGiven = steps.Count(t => rescale.At(t, basin).Status != ArealStatus.Withheld),
+            Shared = shared,
             RedrawSum = redrawSum.Value,
             RescaleSum = rescaleSum.Value,
             CompleteSum = completeSum.Value,
@@ -112,21 +117,21 @@ internal sealed record PolicyContrast
                 "mm",
                 6,
                 $"Sum under Redraw, {Both}",
-                rows.Select(row => (double?)row.RedrawSum)
+                rows.Select(row => row.Shared == 0 ? null : (double?)row.RedrawSum)
             ),
             Column.OfNumbers(
                 "rescale_mm",
                 "mm",
                 6,
                 $"Sum under Rescale, {Both}",
-                rows.Select(row => (double?)row.RescaleSum)
+                rows.Select(row => row.Shared == 0 ? null : (double?)row.RescaleSum)
             ),
             Column.OfNumbers(
                 "difference_mm",
                 "mm",
                 6,
                 "Rescale minus Redraw",
-                rows.Select(row => (double?)(row.RescaleSum - row.RedrawSum))
+                rows.Select(row => row.Shared == 0 ? null : (double?)(row.RescaleSum - row.RedrawSum))
             ),
             Column.OfNumbers(
                 "difference_percent",
@@ -140,7 +145,7 @@ internal sealed record PolicyContrast
                 "mm",
                 6,
                 "Rescale minus Redraw at the step where they part most",
-                rows.Select(row => (double?)row.Largest)
+                rows.Select(row => row.Shared == 0 ? null : (double?)row.Largest)
             ),
             Column.OfText(
                 "largest_end",
@@ -151,8 +156,8 @@ internal sealed record PolicyContrast
                 "withhold_mm",
                 "mm",
                 6,
-                "Sum under Withhold",
-                rows.Select(row => (double?)row.CompleteSum)
+                "Sum under Withhold; blank where it has no value",
+                rows.Select(row => row.Complete == 0 ? null : (double?)row.CompleteSum)
             ),
             Column.OfNumbers(
                 "left_out_percent",

@@ -42,6 +42,7 @@ public sealed record StormsStep(ArealRainfall Areal, int DryFor, double AtLeast,
                 $"A storm is parted from the next by {DryFor} or more steps on end with less than {WetFrom} mm, in {(Basin is null ? "the mean of all basins by area" : $"basin {Basin}")}, and has {AtLeast} mm or more."
             )
         );
+        TellOfUnseen(context, series);
         TellOfGaps(context, storms);
         return new StormList(Areal, [.. storms]);
     }
@@ -73,6 +74,23 @@ public sealed record StormsStep(ArealRainfall Areal, int DryFor, double AtLeast,
             : throw new RefusedException(
                 Finding.Error("RR0541", Place.Of($"basin {id}"), "There is no such basin.", NearWords.Mend(id, ids))
             );
+    }
+
+    /// <summary>Storms are sought only where the series has a value; how much it lacks says what may have been missed.</summary>
+    private static void TellOfUnseen(StepContext context, double?[] series)
+    {
+        var unseen = series.Count(depth => depth is null);
+        if (unseen > 0)
+        {
+            context.Find(
+                Finding.Notice(
+                    "RR0553",
+                    Place.Of("storms"),
+                    $"{Counted.Of(unseen, "step")} of {series.Length.ToString("N0", CultureInfo.InvariantCulture)} cannot be looked at, because a basin in which storms are sought has no value there.",
+                    "Storms in them are not listed. Fewer are lost where basin: names one basin, or where less must report."
+                )
+            );
+        }
     }
 
     private void TellOfGaps(StepContext context, Storm[] storms)

@@ -73,7 +73,7 @@ internal sealed class RecordPeek(TextInput text, PeekColumn[] columns, PeekForm 
                 "caution",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{times.Unreadable:N0} rows have no time that can be read, the first in line {times.FirstUnreadable}."
+                    $"{Counted.Of(times.Unreadable, "row has", "rows have")} no time that can be read, the first in line {times.FirstUnreadable}."
                 )
             );
         }
@@ -84,7 +84,7 @@ internal sealed class RecordPeek(TextInput text, PeekColumn[] columns, PeekForm 
                 "caution",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{scan.TwiceCount:N0} values stand twice, the first {scan.Twice}."
+                    $"{Counted.Of(scan.TwiceCount, "value stands", "values stand")} twice, the first {scan.Twice}."
                 )
             );
         }
@@ -95,14 +95,14 @@ internal sealed class RecordPeek(TextInput text, PeekColumn[] columns, PeekForm 
                 "caution",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{scan.NegativeCount:N0} values are below zero, the first {scan.Negative}."
+                    $"{Counted.Of(scan.NegativeCount, "value is", "values are")} below zero, the first {scan.Negative}."
                 )
             );
         }
 
         if (scan.Texts.Count > 0)
         {
-            yield return ("caution", $"Not numbers: {Listing.Of([.. scan.Texts.Select(Counted)])}.");
+            yield return ("caution", $"Not numbers: {Listing.Of([.. scan.Texts.Select(WithCount)])}.");
         }
     }
 
@@ -110,11 +110,14 @@ internal sealed class RecordPeek(TextInput text, PeekColumn[] columns, PeekForm 
     {
         if (scan.Marks.Count > 0)
         {
-            yield return ("markers", $"{Listing.Of([.. scan.Marks.Select(Counted)])}: taken as missing or trace here");
+            yield return (
+                "markers",
+                $"{Listing.Of([.. scan.Marks.Select(WithCount)])}: taken as missing or trace here"
+            );
         }
     }
 
-    private static string Counted(KeyValuePair<string, int> mark) =>
+    private static string WithCount(KeyValuePair<string, int> mark) =>
         string.Create(CultureInfo.InvariantCulture, $"{mark.Key} ({mark.Value:N0})");
 
     private string ReadWith(string step, RecordScan scan)

@@ -1,5 +1,6 @@
 using System.Globalization;
 using RecipeRunner.Model.Rain;
+using RecipeRunner.Model.Wording;
 using RecipeRunner.Steps.Reading.Records;
 
 namespace RecipeRunner.Steps.Peeking;
@@ -23,7 +24,7 @@ internal static class RecordWords
             "span",
             string.Create(
                 CultureInfo.InvariantCulture,
-                $"{records.Times}, {records.Times.Count:N0} steps, as {records.Times.Step.ToSettingText()}"
+                $"{records.Times}, {Counted.Of(records.Times.Count, "step")}, as {records.Times.Step.ToSettingText()}"
             )
         );
         yield return (
@@ -46,13 +47,13 @@ internal static class RecordWords
             yield return ("silences", $"longest in steps: {string.Join("; ", longest)}");
         }
 
-        if (survey.Impossible is [var (step, gauge, limit), ..])
+        if (survey.Impossible is [var (step, gauge, depth, limit), ..])
         {
             yield return (
                 "caution",
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{survey.ImpossibleCount:N0} values are {(isMillimetres ? "" : "if in millimetres ")}more than was ever measured in such a step ({limit} mm), the first {records.DepthsAt(step)[gauge]:0.###} at {records.GaugeIds[gauge]}, {records.Times.TextAt(step)}."
+                    $"{Counted.Of(survey.ImpossibleCount, "value is", "values are")}{(isMillimetres ? "" : ", if in millimetres,")} more than was ever measured in so long a time ({limit} mm), the first {depth:0.###} at {records.GaugeIds[gauge]}, {records.Times.TextAt(step)}."
                 )
             );
         }

@@ -54,13 +54,19 @@ public sealed record ReadGhcnDailyStep(string File, TimeStep Step, GaugeNetwork?
             context,
             "RR0281",
             presumedZero,
-            "were missing and are presumed zero by the source (flag P); they count as estimated zeros"
+            (
+                "was missing and is presumed zero by the source (flag P); it counts as an estimated zero",
+                "were missing and are presumed zero by the source (flag P); they count as estimated zeros"
+            )
         );
         TellOfCount(
             context,
             "RR0288",
             contradicting,
-            "have a flag that says that there was nothing to measure (T or P), and yet a depth; they count as failed"
+            (
+                "has a flag that says that there was nothing to measure (T or P), and yet a depth; it counts as failed",
+                "have a flag that says that there was nothing to measure (T or P), and yet a depth; they count as failed"
+            )
         );
         return RecordAssembly.Finish(context, parts, File);
     }
@@ -116,7 +122,7 @@ public sealed record ReadGhcnDailyStep(string File, TimeStep Step, GaugeNetwork?
         }
     }
 
-    private void TellOfCount(StepContext context, string code, int count, string words)
+    private void TellOfCount(StepContext context, string code, int count, (string One, string Many) words)
     {
         if (count > 0)
         {
@@ -124,7 +130,7 @@ public sealed record ReadGhcnDailyStep(string File, TimeStep Step, GaugeNetwork?
                 Finding.Caution(
                     code,
                     new Place(File),
-                    string.Create(CultureInfo.InvariantCulture, $"{count:N0} values {words}."),
+                    $"{Counted.Of(count, $"value {words.One}", $"values {words.Many}")}.",
                     "Where such days matter, compare them with gauges nearby."
                 )
             );

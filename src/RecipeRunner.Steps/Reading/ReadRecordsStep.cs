@@ -36,6 +36,7 @@ public sealed record ReadRecordsStep(
     /// <inheritdoc/>
     public override RainRecords Execute(StepContext context)
     {
+        RequireDepthsOfTotals();
         var (parts, forms) = (new List<RecordPart>(), new List<string>());
         foreach (var name in context.FindInputs(File))
         {
@@ -68,4 +69,24 @@ public sealed record ReadRecordsStep(
 
     private RecordSettings Settings() =>
         new(Unit, Step, new RecordMarks(Missing, Trace, Accumulating, Estimated), Form);
+
+    /// <summary>A mean intensity says nothing of the steps before its own, so it cannot be what fell over several.</summary>
+    private void RequireDepthsOfTotals()
+    {
+        var isTotal =
+            !Accumulating.IsEmpty
+            || Form is { Over: not null }
+            || (Form?.Flags.Any(flag => flag.Meaning == RecordStatus.Accumulated) ?? false);
+        if (Unit.IsIntensity && isTotal)
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0289",
+                    new Place(File),
+                    $"Totals of several steps cannot be read as intensities ({Unit.Name}).",
+                    "Give depths where rain accumulates over steps, or read without accumulating:, over: and Flag.Accumulating."
+                )
+            );
+        }
+    }
 }

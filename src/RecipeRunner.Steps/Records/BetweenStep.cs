@@ -3,6 +3,7 @@ using NodaTime;
 using NodaTime.Text;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Records;
 
@@ -38,6 +39,7 @@ public sealed record BetweenStep(RainRecords Rain, string First, string Last) : 
         }
 
         TellOfShortSpan(context, first, last);
+        TellOfCutSteps(context, first, last);
         TellOfCutTotals(context, steps[0], steps[^1]);
         return Cut(steps[0], steps.Length);
     }
@@ -85,6 +87,41 @@ public sealed record BetweenStep(RainRecords Rain, string First, string Last) : 
         }
     }
 
+    /// <summary>A month or year counts by its first date: cut by the first date it is left out, by the last it is taken whole.</summary>
+    private void TellOfCutSteps(StepContext context, LocalDate first, LocalDate last)
+    {
+        var (before, after) = (StepOver(first), StepOver(last));
+        List<string> cut = [];
+        if (before is { } early && Rain.Times.DateAt(early) < first)
+        {
+            cut.Add($"{First} lies within {Rain.Times.TextAt(early)}, which is left out");
+        }
+
+        if (
+            after is { } late
+            && Rain.Times.Step.DateOf(Rain.Times.Step.After(Rain.Times.LabelAt(late), 1)) > last.PlusDays(1)
+        )
+        {
+            cut.Add($"{Last} lies within {Rain.Times.TextAt(late)}, which is taken whole");
+        }
+
+        if (cut.Count > 0)
+        {
+            context.Find(
+                Finding.Caution(
+                    "RR0550",
+                    new Place(Rain.Source),
+                    $"{string.Join("; ", cut)}: the records are {Rain.Times.Step.ToSettingText()}.",
+                    "Give dates at which such steps begin and end."
+                )
+            );
+        }
+    }
+
+    /// <summary>The step of several dates that holds one.</summary>
+    private int? StepOver(LocalDate date) =>
+        Rain.Times.Step.LabelsAreDates ? Rain.Times.IndexOf(Rain.Times.Step.LabelOf(date.AtMidnight())!.Value) : null;
+
     private void TellOfCutTotals(StepContext context, int first, int last)
     {
         var cut = Rain.Accumulations.Count(total =>
@@ -97,7 +134,7 @@ public sealed record BetweenStep(RainRecords Rain, string First, string Last) : 
                     "RR0522",
                     new Place(Rain.Source),
                     FormattableString.Invariant(
-                        $"{cut} accumulated totals reach over the first or last date; their steps stay without a value."
+                        $"{Counted.Of(cut, "accumulated total reaches", "accumulated totals reach")} over the first or last date; their steps stay without a value."
                     ),
                     "Spread accumulations before taking a span."
                 )

@@ -30,7 +30,10 @@ public sealed record JoinRecordsStep(RainRecords Rain, RainRecords More) : Step<
         var problems = new Problems();
         joined.Add(Rain, problems);
         joined.Add(More, problems);
+        joined.CheckTotals($"{Rain.Source} and {More.Source}", problems);
         problems.ThrowIfAny();
+        TellOfOpenEnds(context, Rain, More);
+        TellOfOpenEnds(context, More, Rain);
         if (joined.Agreeing > 0)
         {
             context.Find(
@@ -39,7 +42,7 @@ public sealed record JoinRecordsStep(RainRecords Rain, RainRecords More) : Step<
                     new Place(More.Source),
                     string.Create(
                         CultureInfo.InvariantCulture,
-                        $"{joined.Agreeing} values stand in {Rain.Source} as well, and agree."
+                        $"{Counted.Of(joined.Agreeing, "value stands", "values stand")} in {Rain.Source} as well, with the same depth."
                     )
                 )
             );
@@ -67,11 +70,51 @@ public sealed record JoinRecordsStep(RainRecords Rain, RainRecords More) : Step<
                     "RR0532",
                     new Place(More.Source),
                     $"Steps differ: {Listing.Of(Rain.GaugeIds)} of {Rain.Source} have {Rain.Times.Step.ToSettingText()}, {Listing.Of(More.GaugeIds)} of {More.Source} have {More.Times.Step.ToSettingText()}.",
-                    "Bring both to one step first: hours to days with .ToDays(endingAt: …), days to months with .ToMonths(). Days of different ending cannot be brought together."
+                    "Bring both to one step first: hours to days with .ToDays(endingAt: …), days to months with .ToMonths(). Days of different ending cannot be brought together. Where only one step says its clock (UTC…), give both the same utcOffset:."
                 )
             );
         }
     }
+
+    /// <summary>Rain that accumulates to the end of one record may be in the first value of the next, which then is no value of one step.</summary>
+    private static void TellOfOpenEnds(StepContext context, RainRecords early, RainRecords late)
+    {
+        if (late.Times.IndexOf(early.Times.Step.After(early.Times.Last, 1)) is not { } next)
+        {
+            return;
+        }
+
+        var open = early
+            .GaugeIds.Where((id, gauge) => IsOpenAtEnd(early, gauge) && Reports(late, id, next))
+            .Select(id =>
+                string.Create(
+                    CultureInfo.InvariantCulture,
+                    $"{id} {late.DepthsAt(next)[late.GaugeIds.IndexOf(id)]:0.###} mm"
+                )
+            )
+            .ToArray();
+        if (open.Length > 0)
+        {
+            context.Find(
+                Finding.Caution(
+                    "RR0551",
+                    new Place(early.Source),
+                    $"Rain accumulated up to its last step, so the values of {late.Times.TextAt(next)} may be totals of several steps, yet they count for one: {Listing.Of(open)}.",
+                    "Read the files as one (\"rain/*.csv\"), which settles such totals."
+                )
+            );
+        }
+    }
+
+    private static bool IsOpenAtEnd(RainRecords rain, int gauge)
+    {
+        var last = rain.Times.Count - 1;
+        return rain.StatusesAt(last)[gauge] == RecordStatus.Accumulated
+            && !rain.Accumulations.Any(total => total.Gauge == gauge && total.LastStep == last);
+    }
+
+    private static bool Reports(RainRecords rain, string id, int step) =>
+        rain.GaugeIds.IndexOf(id) is var gauge and >= 0 && rain.StatusesAt(step)[gauge].Reports();
 
     private Timeline Span()
     {

@@ -41,16 +41,40 @@ internal sealed class JoinedValues(ImmutableArray<string> ids, Timeline times)
         );
     }
 
+    /// <summary>Looks for totals that share steps, so that rain would count twice.</summary>
+    /// <param name="source">What to call the records.</param>
+    /// <param name="problems">Takes such totals.</param>
+    public void CheckTotals(string source, Problems problems)
+    {
+        foreach (var (one, other) in Totals().Zip(Totals().Skip(1)))
+        {
+            if (one.Gauge == other.Gauge && other.FirstStep <= one.LastStep)
+            {
+                problems.Add(
+                    "RR0533",
+                    new Place(source, Item: $"gauge {ids[one.Gauge]}"),
+                    $"It has two totals that share steps: {Words(one)}, and {Words(other)}.",
+                    "Take one of the two: leave it out of a file, or take a span with .Between(…)."
+                );
+            }
+        }
+    }
+
     /// <summary>The records of all.</summary>
     /// <param name="source">What to call them.</param>
-    public RainRecords ToRecords(string source) =>
-        new(
-            ids,
-            times,
-            depths,
-            statuses,
-            source,
-            [.. totals.Distinct().OrderBy(total => total.Gauge).ThenBy(total => total.FirstStep)]
+    public RainRecords ToRecords(string source) => new(ids, times, depths, statuses, source, [.. Totals()]);
+
+    private IEnumerable<Accumulation> Totals() =>
+        totals
+            .Distinct()
+            .OrderBy(total => total.Gauge)
+            .ThenBy(total => total.FirstStep)
+            .ThenBy(total => total.LastStep);
+
+    private string Words(Accumulation total) =>
+        string.Create(
+            CultureInfo.InvariantCulture,
+            $"{total.DepthMillimetres:0.###} mm from {times.TextAt(total.FirstStep)} to {times.TextAt(total.LastStep)}"
         );
 
     private void Put(RainRecords rain, int t, int gauge, int at, Problems problems)

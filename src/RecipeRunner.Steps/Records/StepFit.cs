@@ -29,7 +29,7 @@ internal sealed class StepFit
     {
         var fit = new StepFit(rain, to, ShiftOf(rain, to));
         var (first, next) = (fit.LabelOver(0), to.After(fit.LabelOver(0), 1));
-        if (fit.Expected(first) < 2 && fit.Expected(next) < 2)
+        if (to.IntervalOf(first).Hours <= rain.Times.IntervalAt(0).Hours)
         {
             throw fit.Refusal(
                 "RR0527",

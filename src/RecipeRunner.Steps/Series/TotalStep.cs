@@ -96,7 +96,7 @@ public sealed record TotalStep(ArealRainfall Areal, Every Period, ICompletenessR
                 Finding.Notice(
                     "RR0506",
                     Place.Of($"totals over {Period.ToSettingText()}"),
-                    $"Withheld, because {Complete.ToSettingText()} of their steps must have a value: {Listing.Of(withheld)}.",
+                    $"Withheld, because too few of their steps have a value ({Complete.ToSettingText()} must): {Listing.Of(withheld)}.",
                     "The record may begin or end within a period, or values were withheld for want of gauges."
                 )
             );

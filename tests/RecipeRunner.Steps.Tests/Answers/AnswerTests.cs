@@ -18,6 +18,27 @@ public sealed class AnswerTests : IDisposable
     public void Dispose() => bench.Dispose();
 
     [Fact]
+    public void Steps_at_which_storms_cannot_be_seen_are_counted()
+    {
+        OneBasin(". . 0 0 0 5 0 0 0 .").Storms(dryFor: 2, atLeast: 1);
+
+        bench.Study.Findings.Single(finding => finding.Code == "RR0553").What.ShouldStartWith("3 steps of 10 ");
+    }
+
+    [Fact]
+    public void A_duration_that_no_run_of_values_reaches_has_no_maximum_and_is_told()
+    {
+        // Six steps in all; the year asks for none, so only the run of seven is not to be had.
+        var maxima = OneBasin("1 2 3 4 5 6").AnnualMaxima([1, 7], Every.WaterYear(firstMonth: 10), AtLeast.Percent(0));
+
+        Numbers(maxima.ToTable(), "depth_mm").ShouldBe([6, null]);
+        Numbers(maxima.ToTable(), "weight_least")[1].ShouldBeNull();
+        var finding = bench.Study.Findings.Single();
+        finding.Code.ShouldBe("RR0552");
+        finding.What.ShouldContain("2024 (7 steps)");
+    }
+
+    [Fact]
     public void Storms_are_parted_by_dry_steps()
     {
         var areal = OneBasin("0 0 5 0 6 0 0 9 1 0 0 0 2 0 0");

@@ -14,6 +14,20 @@ public sealed class ComparePoliciesTests : IDisposable
 
     public void Dispose() => bench.Dispose();
 
+    [Fact]
+    public void Without_a_step_to_compare_there_is_no_sum()
+    {
+        var weights = bench
+            .Basins(("strip", Bench.Box(0, 0, 100, 10)))
+            .WeighBy(bench.Network(("A", 10, 5), ("B", 90, 5)).ThiessenCells());
+        var rain = bench.Records(Rainfall.Daily, new LocalDateTime(2024, 1, 1, 0, 0), ("A", ". ."), ("B", ". ."));
+
+        var table = weights.ComparePolicies(rain).ToTable();
+
+        string[] sums = ["redraw_mm", "rescale_mm", "difference_mm", "largest_mm", "withhold_mm"];
+        sums.ShouldAllBe(name => Numbers(table, name).Single() == null);
+    }
+
     /// <summary>
     /// By hand: a strip of 100 with gauges at 10, 50 and 90, walls at 30 and 70, weights 0.3, 0.4, 0.3. Without the last the wall
     /// stands at 30 still and the middle gauge has 0.7: Redraw gives 0.3·0 + 0.7·10 = 7 mm, Rescale (0.3·0 + 0.4·10) / 0.7 = 40/7.

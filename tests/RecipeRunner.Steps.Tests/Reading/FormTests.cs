@@ -13,6 +13,15 @@ public sealed class FormTests : IDisposable
 
     public void Dispose() => bench.Dispose();
 
+    [Fact]
+    public void A_file_without_header_whose_columns_are_named_is_to_be_read_by_number()
+    {
+        var problem = Bench.Refused(() => Read("2024-01-01,1\n", RecordForm.OneGauge(time: "date", value: "mm")))[0];
+
+        (problem.Code, problem.Where.Line).ShouldBe(("RR0264", 1));
+        problem.Mend.ShouldContain("RecordForm.OneGauge(time: 1, value: 2)");
+    }
+
     public static TheoryData<string, RecordForm?> SameRecords =>
         new()
         {

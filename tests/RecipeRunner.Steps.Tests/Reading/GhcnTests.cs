@@ -97,7 +97,7 @@ public sealed class GhcnTests : IDisposable
         );
         bench.Verbs.ReadGhcnDaily("2024.csv", Morning).Accumulations.ShouldBe([new Accumulation(0, 1, 2, 0.9)]);
 
-        bench.Study.Findings.Single(finding => finding.Code == "RR0258").What.ShouldStartWith("1 steps");
+        bench.Study.Findings.Single(finding => finding.Code == "RR0258").What.ShouldStartWith("1 step has no row");
     }
 
     [Theory]

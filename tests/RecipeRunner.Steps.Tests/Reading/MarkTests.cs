@@ -12,6 +12,35 @@ public sealed class MarkTests : IDisposable
     public void Dispose() => bench.Dispose();
 
     [Fact]
+    public void An_intensity_is_no_total_of_several_steps()
+    {
+        bench.Write("rain.csv", "date,A\n2024-01-01,A\n2024-01-02,6\n");
+
+        Bench
+            .Refused(() =>
+                bench.Verbs.ReadRecords(
+                    "rain.csv",
+                    RainUnit.MillimetresPerHour,
+                    TimeStep.Days("09:00"),
+                    accumulating: ["A"]
+                )
+            )
+            .Single()
+            .Code.ShouldBe("RR0289");
+    }
+
+    [Fact]
+    public void Totals_beyond_any_ever_measured_are_doubted()
+    {
+        // source: 2,493 mm fell in 48 hours at Cherrapunji in 1995, the most ever (WMO; from memory).
+        Read("A", "2490", "A", "2500");
+
+        var finding = bench.Study.Findings.Single(finding => finding.Code == "RR0260");
+        finding.What.ShouldStartWith("2500 mm on 2024-01-04 ");
+        finding.What.ShouldEndWith("(2493 mm). 1 value is.");
+    }
+
+    [Fact]
     public void Each_mark_has_its_own_meaning()
     {
         var records = Read("1", "M", "-9999", "T", "-1", "2.5E", "3 E", "", "0");

@@ -33,10 +33,10 @@ public sealed class PeekTests : IDisposable
             ]);
         lines["caution"]
             .ShouldBe([
-                "1 values are if in millimetres more than was ever measured in such a step (1825 mm), the first 3000 at A, 2024-01-02.",
-                "1 rows have no time that can be read, the first in line 9.",
+                "1 value is, if in millimetres, more than was ever measured in so long a time (1825 mm), the first 3000 at A, 2024-01-02.",
+                "1 row has no time that can be read, the first in line 9.",
                 "2 values stand twice, the first A at 2024-01-03 in lines 6 and 7.",
-                "1 values are below zero, the first -0.5 at A, 2024-01-03.",
+                "1 value is below zero, the first -0.5 at A, 2024-01-03.",
                 "Not numbers: x (1).",
             ]);
     }

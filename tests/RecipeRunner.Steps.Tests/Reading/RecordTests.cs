@@ -12,6 +12,50 @@ public sealed class RecordTests : IDisposable
 
     public void Dispose() => bench.Dispose();
 
+    [Fact]
+    public void Years_beside_depths_that_look_like_years_need_a_form()
+    {
+        // 1010 mm in the year 2001, or gauge 2001 with 2010 mm in the year 1010: only the recipe can tell.
+        const string Text = "year,A,B\n2001,1010,2010\n";
+
+        Bench.Refused(() => Read(Text, TimeStep.WaterYears(10))).Single().Code.ShouldBe("RR0254");
+        Read("year,A,B\n2001,990,2010\n", TimeStep.WaterYears(10)).GaugeIds.ShouldBe(["A", "B"]);
+    }
+
+    [Fact]
+    public void Fillings_for_missing_values_are_no_depths()
+    {
+        // source: 9.96921E+36 is the default filling of NetCDF (netcdf.h, NC_FILL_FLOAT; from memory).
+        var problem = Bench.Refused(() => Read("date,A\n2024-01-01,9.96921E+36\n")).Single();
+
+        (problem.Code, problem.Where.Line).ShouldBe(("RR0250", 2));
+        problem.Mend.ShouldContain("missing: [\"9.96921E+36\"]");
+    }
+
+    [Fact]
+    public void Silences_of_hours_are_told_from_a_week_on()
+    {
+        // 168 hours are a week: 167 silent hours are not told, 168 are.
+        ReadHours(silent: 167);
+        bench.Study.Findings.ShouldBeEmpty();
+
+        ReadHours(silent: 168);
+        bench.Study.Findings.Single().What.ShouldStartWith("Gauges are silent for 168 steps or more once; ");
+    }
+
+    private void ReadHours(int silent)
+    {
+        var start = new LocalDateTime(2024, 1, 1, 1, 0);
+        var rows = Enumerable
+            .Range(0, 200)
+            .Select(hour =>
+                FormattableString.Invariant(
+                    $"{start.PlusHours(hour):uuuu-MM-ddTHH:mm},{(hour >= 1 && hour <= silent ? "" : "1")}\n"
+                )
+            );
+        Read("time,A\n" + string.Concat(rows), TimeStep.Hours());
+    }
+
     [Theory]
     [InlineData("date,B,A\n2024-01-01,1.5,\n2024-01-02,0,2.5\n")]
     [InlineData("gauge,date,mm\nA,2024-01-02,2.5\nB,2024-01-01,1.5\nB,2024-01-02,0\nA,2024-01-01,\n")]

@@ -14,6 +14,41 @@ public sealed class JoinAndSpreadTests : IDisposable
 
     public void Dispose() => bench.Dispose();
 
+    [Theory]
+    [InlineData(". a a=12 4")] // another depth of the same two days
+    [InlineData("a a a=10 4")] // the same depth, of three days
+    public void Two_totals_of_the_same_steps_are_refused(string steps)
+    {
+        var one = bench.Records(Rainfall.Daily, First, ("A", ". a a=10 4"));
+        var other = bench.Records(Rainfall.Daily, First, ("A", steps));
+
+        var problem = Bench.Refused(() => one.And(other)).Single();
+        (problem.Code, problem.Where.Item).ShouldBe(("RR0533", "gauge A"));
+        problem.What.ShouldContain("10 mm from 2024-01-02 to 2024-01-03");
+    }
+
+    [Fact]
+    public void The_same_total_in_both_counts_once() =>
+        bench
+            .Records(Rainfall.Daily, First, ("A", "a a=10"))
+            .And(bench.Records(Rainfall.Daily, First, ("A", "a a=10")))
+            .Accumulations.ShouldBe([new Accumulation(0, 0, 1, 10)]);
+
+    [Fact]
+    public void A_value_after_rain_that_accumulated_to_the_records_end_is_pointed_out()
+    {
+        // B's total is whole, C has no value after it: only A's 20 mm may be those of three days.
+        var early = bench.Records(Rainfall.Daily, First, ("A", "1 a a"), ("B", "1 a a=3"), ("C", "1 1 a"));
+        var late = bench.Records(Rainfall.Daily, First.PlusDays(3), ("A", "20 0"), ("B", "9 0"), ("C", ". 0"));
+
+        late.And(early);
+
+        var finding = bench.Study.Findings.Single();
+        finding.Code.ShouldBe("RR0551");
+        finding.What.ShouldContain("2024-01-04");
+        finding.What.ShouldEndWith("count for one: A 20 mm.");
+    }
+
     [Fact]
     public void Records_of_other_gauges_and_other_times_stand_side_by_side()
     {

@@ -69,6 +69,7 @@ public sealed class LongerStepsTests : IDisposable
 
         Bench.Refused(() => six.ToDays(endingAt))[0].Code.ShouldBe(code);
         six.ToDays("06:00").Times.Count.ShouldBe(3);
+        Bench.Refused(() => six.ToHours(8))[0].Code.ShouldBe("RR0526");
     }
 
     [Fact]

@@ -110,6 +110,10 @@ public sealed class GapPolicyTests : IDisposable
 
         Under(Within.Kilometres(4.8)).ShouldBe(ArealStatus.Partial);
         Under(Within.Kilometres(4.7)).ShouldBe(ArealStatus.Withheld);
+        Within
+            .Kilometres(1.001)
+            .IsMetBy(1, 1, 1001)
+            .ShouldBeTrue("1.001 times 1000 is a little less than 1001 in binary");
         Under(AtLeast.Gauges(1)).ShouldBe(ArealStatus.Withheld);
         Under(ReportingRule.Any).ShouldBe(ArealStatus.Partial);
         rain = bench.Records(Rainfall.Daily, new NodaTime.LocalDateTime(2024, 1, 1, 0, 0), ("A", "5"), ("far", "8"));

@@ -16,6 +16,23 @@ public sealed class TotalTests : IDisposable
     public void Dispose() => bench.Dispose();
 
     [Fact]
+    public void Months_that_a_span_cuts_are_pointed_out()
+    {
+        // June has the date 1 June, which is not from 15 June on; July is taken with all of its days.
+        var rain = bench.Records(TimeStep.Months, new LocalDateTime(2024, 5, 1, 0, 0), ("A", "5 6 7 8"));
+
+        rain.Between("2024-06-15", "2024-07-20").DepthsAt(0).ToArray().ShouldBe([7]);
+
+        var finding = bench.Study.Findings.Single();
+        finding.Code.ShouldBe("RR0550");
+        finding.What.ShouldContain("2024-06-15 lies within 2024-06, which is left out");
+        finding.What.ShouldContain("2024-07-20 lies within 2024-07, which is taken whole");
+        bench.Study.Findings.Clear();
+        rain.Between("2024-06-01", "2024-07-31").Times.Count.ShouldBe(2);
+        bench.Study.Findings.ShouldBeEmpty();
+    }
+
+    [Fact]
     public void Months_are_summed_by_the_date_of_their_steps()
     {
         var totals = Areal(new LocalDate(2024, 1, 1), 60, _ => 1).Total(Every.Month);

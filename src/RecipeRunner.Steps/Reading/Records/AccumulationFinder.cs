@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using System.Globalization;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Reading.Records;
 
@@ -83,7 +84,7 @@ internal sealed class AccumulationFinder
     private void SettleTotal(SpanTotal total)
     {
         var first = total.LastStep - total.Steps + 1;
-        var (free, missing) = (first >= 0, new List<int>(total.Steps));
+        var (free, missing) = (first >= 0, new List<int>());
         for (var step = Math.Max(0, first); step <= total.LastStep; step++)
         {
             var at = (step * Gauges) + total.Gauge;
@@ -123,7 +124,7 @@ internal sealed class AccumulationFinder
                     new Place(part.File),
                     string.Create(
                         CultureInfo.InvariantCulture,
-                        $"{accumulations.Length:N0} values are totals of several steps; longest: {part.GaugeIds[longest.Gauge]} {part.Times.TextAt(longest.FirstStep)} to {part.Times.TextAt(longest.LastStep)} ({longest.LastStep - longest.FirstStep + 1})."
+                        $"{Counted.Of(accumulations.Length, "value is a total", "values are totals")} of several steps; longest: {part.GaugeIds[longest.Gauge]} {part.Times.TextAt(longest.FirstStep)} to {part.Times.TextAt(longest.LastStep)} ({longest.LastStep - longest.FirstStep + 1})."
                     ),
                     "Their steps count as silent until the totals are spread over them."
                 )
@@ -139,7 +140,7 @@ internal sealed class AccumulationFinder
                     new Place(part.File),
                     string.Create(
                         CultureInfo.InvariantCulture,
-                        $"Of {lost.Count:N0} spans over which rain accumulated the total cannot be used, the first at {part.GaugeIds[gauge]}, {part.Times.TextAt(step)}: no value follows, it failed, its number of steps is not said, or other values stand within it."
+                        $"{Counted.Of(lost.Count, "span")} over which rain accumulated without a total that can be used, the first at {part.GaugeIds[gauge]}, {part.Times.TextAt(step)}: no value follows, it failed, its number of steps is not said, or other values stand within it."
                     ),
                     "These steps stay without a value."
                 )

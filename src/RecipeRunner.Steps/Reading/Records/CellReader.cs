@@ -11,6 +11,9 @@ internal readonly record struct Cell(double Depth, RecordStatus Status);
 /// <summary>Reads the cells of values: a depth, a mark, or a problem; a blank cell is missing.</summary>
 internal sealed class CellReader(string file, RainUnit unit, RecordMarks marks)
 {
+    /// <summary>Millimetres that are no depth but a filling for missing values, such as 9.96921E+36; sums of less stay finite.</summary>
+    private const double Absurd = 1e16;
+
     private readonly bool isNeverMark = !marks.HasDepths;
 
     /// <summary>Reads a cell.</summary>
@@ -78,7 +81,14 @@ internal sealed class CellReader(string file, RainUnit unit, RecordMarks marks)
             return default;
         }
 
-        return new Cell(unit.ToMillimetres(value + 0.0, hours), status);
+        var millimetres = unit.ToMillimetres(value + 0.0, hours);
+        if (!(millimetres < Absurd))
+        {
+            AddNotDepth(text.ToString(), place, gauge, problems);
+            return default;
+        }
+
+        return new Cell(millimetres, status);
     }
 
     private ReadOnlySpan<char> WithoutSuffix(ReadOnlySpan<char> text)
@@ -102,7 +112,8 @@ internal sealed class CellReader(string file, RainUnit unit, RecordMarks marks)
                 ? $"If it marks a trace, too little to measure, add   trace: [\"{text}\"]"
             : letters.Length < text.Length && letters.All(char.IsAsciiLetter)
                 ? $"If the letters mark an estimated value, add   estimated: [\"{letters}\"]"
-            : text.Any(char.IsAsciiLetter) ? $"If it marks a missing value, add   missing: [\"{text}\"]"
+            : text.Any(char.IsAsciiLetter) || NumberText.TryRead(text, out _)
+                ? $"If it marks a missing value, add   missing: [\"{text}\"]"
             : NumberText.Mend(text);
         problems.Add(
             "RR0250",

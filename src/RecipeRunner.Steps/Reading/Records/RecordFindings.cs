@@ -1,6 +1,7 @@
 using System.Globalization;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Time;
 using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Reading.Records;
@@ -8,16 +9,18 @@ namespace RecipeRunner.Steps.Reading.Records;
 /// <summary>Points out what is doubtful in records: depths beyond any that was ever measured, gauges without a value, long silences, values that are not plain observations.</summary>
 internal static class RecordFindings
 {
-    private const int LongSilence = 7;
+    private const int LongSilenceSteps = 7;
+    private const int LongSilenceHours = 7 * 24;
     private const int MostListed = 5;
 
     /// <summary>Adds the findings.</summary>
     public static void Tell(StepContext context, RainRecords records)
     {
-        var survey = RecordSurvey.Of(records, LongSilence);
+        var longSilence = LongSilence(records.Times);
+        var survey = RecordSurvey.Of(records, longSilence);
         TellOfImpossible(context, records, survey);
         TellOfSilent(context, records, survey);
-        TellOfSilences(context, records, survey);
+        TellOfSilences(context, records, survey, longSilence);
         TellOfFailed(context, records, survey);
         var counts = records.CountByStatus();
         TellOfCount(
@@ -25,14 +28,17 @@ internal static class RecordFindings
             records,
             "RR0270",
             counts[(int)RecordStatus.Trace],
-            "are a trace, too little to measure; they count as zero"
+            (
+                "is a trace, too little to measure; it counts as zero",
+                "are a trace, too little to measure; they count as zero"
+            )
         );
         TellOfCount(
             context,
             records,
             "RR0274",
             counts[(int)RecordStatus.Estimated],
-            "are marked as estimated; they are used as they are"
+            ("is marked as estimated; it is used as it is", "are marked as estimated; they are used as they are")
         );
     }
 
@@ -49,7 +55,7 @@ internal static class RecordFindings
 
     private static void TellOfImpossible(StepContext context, RainRecords records, RecordSurvey survey)
     {
-        foreach (var (t, g, limit) in survey.Impossible)
+        foreach (var (t, g, depth, limit) in survey.Impossible)
         {
             context.Find(
                 Finding.Caution(
@@ -57,7 +63,7 @@ internal static class RecordFindings
                     new Place(records.Source, Item: $"gauge {records.GaugeIds[g]}"),
                     string.Create(
                         CultureInfo.InvariantCulture,
-                        $"{records.DepthsAt(t)[g]:0.#} mm on {records.Times.TextAt(t)} is more than was ever measured anywhere in a step of this length ({limit} mm). {survey.ImpossibleCount:N0} values are."
+                        $"{depth:0.#} mm on {records.Times.TextAt(t)} is more than was ever measured anywhere in so long a time ({limit} mm). {Counted.Of(survey.ImpossibleCount, "value is", "values are")}."
                     ),
                     "Is the unit right? Is it a total of several steps, or a marker of a missing value?"
                 )
@@ -85,7 +91,7 @@ internal static class RecordFindings
         }
     }
 
-    private static void TellOfSilences(StepContext context, RainRecords records, RecordSurvey survey)
+    private static void TellOfSilences(StepContext context, RainRecords records, RecordSurvey survey, int longSilence)
     {
         var silences = survey
             .Silences.Where(silence => silence.Length < records.Times.Count)
@@ -105,7 +111,7 @@ internal static class RecordFindings
                 new Place(records.Source),
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"Gauges are silent for {LongSilence} steps or more {silences.Length} times; longest: {string.Join("; ", listed)}."
+                    $"Gauges are silent for {longSilence:N0} steps or more {Counted.Times(silences.Length)}; longest: {string.Join("; ", listed)}."
                 ),
                 "The gap policy says who takes their share."
             )
@@ -131,13 +137,26 @@ internal static class RecordFindings
                 new Place(records.Source),
                 string.Create(
                     CultureInfo.InvariantCulture,
-                    $"{survey.Failed.Sum():N0} values failed a check of quality and are not used: {Listing.Of(words)}."
+                    $"{Counted.Of(survey.Failed.Sum(), "value failed a check of quality and is not used", "values failed a check of quality and are not used")}: {Listing.Of(words)}."
                 )
             )
         );
     }
 
-    private static void TellOfCount(StepContext context, RainRecords records, string code, int count, string words)
+    /// <summary>The fewest steps of silence that are worth telling: a week of steps shorter than a day, else seven.</summary>
+    private static int LongSilence(Timeline times)
+    {
+        var hours = times.IntervalAt(0).Hours;
+        return hours < 24 ? (int)(LongSilenceHours / hours) : LongSilenceSteps;
+    }
+
+    private static void TellOfCount(
+        StepContext context,
+        RainRecords records,
+        string code,
+        int count,
+        (string One, string Many) words
+    )
     {
         if (count > 0)
         {
@@ -145,7 +164,7 @@ internal static class RecordFindings
                 Finding.Notice(
                     code,
                     new Place(records.Source),
-                    string.Create(CultureInfo.InvariantCulture, $"{count:N0} values {words}.")
+                    $"{Counted.Of(count, $"value {words.One}", $"values {words.Many}")}."
                 )
             );
         }

@@ -51,6 +51,15 @@ internal sealed record RecordLayout(RecordFormKind Kind, bool HasHeader, int Wid
     public static RecordLayout Of(RecordForm form, string[] first, string file, LabelReader labels)
     {
         var byName = form.Time.Columns.Any(column => column.Number == 0);
+        if (
+            form.Time.Columns.Any(column =>
+                column.Number == 0 && !first.Contains(column.Name, StringComparer.OrdinalIgnoreCase)
+            )
+        )
+        {
+            RequireHeader(first, file, labels);
+        }
+
         var time = form.Time.Columns.Select(new ColumnFinder(file, first).Find).ToArray();
         if (time.Length is 0 or > TimeCells.MostColumns)
         {
@@ -92,6 +101,7 @@ internal sealed record RecordLayout(RecordFormKind Kind, bool HasHeader, int Wid
         CsvText.RequireDistinct(names, place.File);
         if (names.Length == 3 && cells.Length >= 2 && labels.LooksLikeTime(cells[1]))
         {
+            RequireOneTime(cells, place, labels);
             return new RecordLayout(RecordFormKind.Long, HasHeader: true, 3, [1]) { Gauge = 0, Value = 2 };
         }
 
@@ -129,6 +139,22 @@ internal sealed record RecordLayout(RecordFormKind Kind, bool HasHeader, int Wid
                     time == 0
                         ? "Say which columns hold what, by number:   form: RecordForm.Wide(time: 1, gauges: [\"A\", \"B\"])   or   form: RecordForm.OneGauge(time: 1, value: 2)"
                         : "Say which columns hold what, by number:   form: RecordForm.Long(gauge: 1, time: 2, value: 3)"
+                )
+            );
+        }
+    }
+
+    /// <summary>Refuses a row whose first two cells may both be the year: a depth or a gauge's id may look like one.</summary>
+    private static void RequireOneTime(string[] cells, Place place, LabelReader labels)
+    {
+        if (labels.LooksLikeTime(cells[0]))
+        {
+            throw new RefusedException(
+                Finding.Error(
+                    "RR0254",
+                    place,
+                    $"Both '{cells[0]}' and '{cells[1]}' may be its time, so that the form of the record cannot be told.",
+                    "Add   form: RecordForm.Wide(time: \"…\")   or   form: RecordForm.Long(gauge: \"…\", time: \"…\", value: \"…\")"
                 )
             );
         }

@@ -2,6 +2,7 @@ using System.Globalization;
 using RecipeRunner.Model.Rain;
 using RecipeRunner.Model.Steps;
 using RecipeRunner.Model.Time;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Reading.Records;
 
@@ -179,7 +180,7 @@ internal sealed class RecordMerge
                     new Place(source),
                     string.Create(
                         CultureInfo.InvariantCulture,
-                        $"{agreeing:N0} values stand in more than one file, and agree."
+                        $"{Counted.Of(agreeing, "value stands", "values stand")} in more than one file, with the same depth."
                     )
                 )
             );

@@ -1,4 +1,5 @@
 using RecipeRunner.Model.Rain;
+using RecipeRunner.Model.Time;
 
 namespace RecipeRunner.Steps.Reading.Records;
 
@@ -18,8 +19,8 @@ internal sealed class RecordSurvey
         Failed = new int[gauges];
     }
 
-    /// <summary>The first values beyond any that was ever measured in a step of their length, with that limit.</summary>
-    public List<(int Step, int Gauge, double Limit)> Impossible { get; } = [];
+    /// <summary>The first values, then totals, beyond any that was ever measured in so long a time, with that limit.</summary>
+    public List<(int Step, int Gauge, double Depth, double Limit)> Impossible { get; } = [];
 
     /// <summary>How many there are.</summary>
     public int ImpossibleCount { get; private set; }
@@ -46,6 +47,11 @@ internal sealed class RecordSurvey
             survey.AddStatuses(step, records.StatusesAt(step), shortest);
         }
 
+        foreach (var total in records.Accumulations)
+        {
+            survey.AddTotal(records.Times, total);
+        }
+
         for (var gauge = 0; gauge < records.GaugeIds.Length; gauge++)
         {
             survey.EndSilence(gauge, records.Times.Count, shortest);
@@ -60,17 +66,27 @@ internal sealed class RecordSurvey
         {
             if (depths[gauge] > limit && statuses[gauge] != RecordStatus.Failed)
             {
-                AddImpossible(step, gauge, limit);
+                AddImpossible(step, gauge, depths[gauge], limit);
             }
         }
     }
 
-    private void AddImpossible(int step, int gauge, double limit)
+    private void AddTotal(Timeline times, Accumulation total)
+    {
+        var (start, end) = (times.IntervalAt(total.FirstStep).Start, times.IntervalAt(total.LastStep).End);
+        var limit = DepthLimit.Of(new RainInterval(start, end));
+        if (total.DepthMillimetres > limit)
+        {
+            AddImpossible(total.LastStep, total.Gauge, total.DepthMillimetres, limit);
+        }
+    }
+
+    private void AddImpossible(int step, int gauge, double depth, double limit)
     {
         ImpossibleCount++;
         if (Impossible.Count < MostKept)
         {
-            Impossible.Add((step, gauge, limit));
+            Impossible.Add((step, gauge, depth, limit));
         }
     }
 

@@ -1,6 +1,7 @@
 using System.Globalization;
 using NodaTime;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Reading.Records;
 
@@ -33,7 +34,7 @@ internal static class RowFindings
                     new Place(part.File),
                     string.Create(
                         CultureInfo.InvariantCulture,
-                        $"{absent.Length} steps have no row, the first {part.Times.TextAt(absent[0])}; all gauges count as missing there."
+                        $"{Counted.Of(absent.Length, "step has", "steps have")} no row, the first {part.Times.TextAt(absent[0])}; all gauges count as missing there."
                     ),
                     "Check whether rows were lost."
                 )

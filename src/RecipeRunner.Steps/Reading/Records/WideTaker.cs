@@ -1,5 +1,6 @@
 using nietras.SeparatedValues;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 using RecipeRunner.Steps.Reading.Texts;
 
 namespace RecipeRunner.Steps.Reading.Records;
@@ -64,7 +65,7 @@ internal sealed class WideTaker : IRowTaker
                     "RR0257",
                     new Place(file),
                     FormattableString.Invariant(
-                        $"{grid.OutOfOrder} rows are earlier than the row before them; they were put in order."
+                        $"{Counted.Of(grid.OutOfOrder, "row is", "rows are")} earlier than the row before; the file was put in order."
                     )
                 )
             );
