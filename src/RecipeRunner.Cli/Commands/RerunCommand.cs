@@ -15,6 +15,14 @@ internal sealed class RerunCommand(Screen screen) : Command<RerunCommand.Options
         [Description("The study's folder.")]
         public required string Study { get; init; }
 
+        [CommandOption("--data <DIR>")]
+        [Description("The folder that has all of the study's inputs, where the study lists some without holding them.")]
+        public string? Data { get; init; }
+
+        [CommandOption("--signers <FILE>")]
+        [Description("A list of allowed signers, as ssh-keygen reads it; one of them must have signed the study.")]
+        public string? Signers { get; init; }
+
         [CommandOption("--details")]
         [Description("Show stack traces with errors.")]
         public bool Details { get; init; }
@@ -30,7 +38,7 @@ internal sealed class RerunCommand(Screen screen) : Command<RerunCommand.Options
             () =>
             {
                 var report = StudyRerun.Of(
-                    settings.Study,
+                    new RerunRequest(settings.Study, settings.Data, settings.Signers),
                     Kitchen.Language,
                     new OutputReader(),
                     printer,

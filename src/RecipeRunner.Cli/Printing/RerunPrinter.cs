@@ -1,6 +1,7 @@
 using System.Globalization;
 using RecipeRunner.Host.Rerunning;
 using RecipeRunner.Host.Running;
+using RecipeRunner.Host.Signing;
 
 namespace RecipeRunner.Cli.Printing;
 
@@ -28,6 +29,11 @@ internal sealed class RerunPrinter(Screen screen) : IRunObserver
         foreach (var problem in report.Problems)
         {
             screen.Line($"  {problem.Code}  {problem.Where}: {problem.What} {problem.Mend}".TrimEnd());
+        }
+
+        if (report.Verdict != Verdict.CannotRerun)
+        {
+            screen.Line($"  signed   {Words(report.Signer)}");
         }
 
         if (report.FirstStep is { } step)
@@ -70,6 +76,11 @@ internal sealed class RerunPrinter(Screen screen) : IRunObserver
             ),
             _ => $"CANNOT RERUN   {study}",
         };
+
+    private static string Words(Signer? signer) =>
+        signer is null ? "not signed"
+        : signer.Identity is null ? $"by {signer.KeyType} {signer.Fingerprint}; whose key that is was not checked"
+        : $"by {signer.Identity}, {signer.KeyType} {signer.Fingerprint}";
 
     private static string Words(ValueDifference value) =>
         Text(

@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using RecipeRunner.Host.Running;
 using RecipeRunner.Host.Scripting;
 using RecipeRunner.Host.Sealing;
+using RecipeRunner.Host.Signing;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Host.Rerunning;
@@ -13,20 +14,21 @@ namespace RecipeRunner.Host.Rerunning;
 public static class StudyRerun
 {
     /// <summary>Reruns.</summary>
-    /// <param name="folder">The study's folder.</param>
+    /// <param name="request">The study, and what is asked beside.</param>
     /// <param name="language">What its recipe may say.</param>
     /// <param name="reader">Reads emitted files, where bytes differ.</param>
     /// <param name="observer">Told how it goes.</param>
     /// <param name="cancellation">Ends the rerun.</param>
     /// <exception cref="OperationCanceledException">The rerun was cancelled.</exception>
     public static RerunReport Of(
-        string folder,
+        RerunRequest request,
         RecipeLanguage language,
         IOutputReader reader,
         IRunObserver observer,
         CancellationToken cancellation
     )
     {
+        var folder = request.Folder;
         if (!Directory.Exists(folder))
         {
             return Unable(
@@ -43,14 +45,24 @@ public static class StudyRerun
         var scratch = Directory.CreateTempSubdirectory("recipe-runner-rerun-");
         try
         {
-            return Rerun(
-                HeldStudy.Open(folder),
+            var signer = SealSignature.Check(folder, request.Signers, cancellation);
+            var held = HeldStudy.Open(folder);
+            Finding[] odd = [.. SealCheck.OfInfo(folder, held.Title, held.Tool), .. AuditedFiles.OfCauses(held)];
+            if (odd.Length > 0)
+            {
+                return Unable([.. odd]);
+            }
+
+            var report = Rerun(
+                held,
+                RerunInputs.FolderOf(held, request.DataFolder),
                 Path.Combine(scratch.FullName, "again.study"),
                 language,
                 reader,
                 observer,
                 cancellation
             );
+            return Weighed(report, AuditedFiles.OfResults(held)) with { Signer = signer };
         }
         catch (RefusedException refused)
         {
@@ -64,6 +76,7 @@ public static class StudyRerun
 
     private static RerunReport Rerun(
         HeldStudy held,
+        string? inputs,
         string again,
         RecipeLanguage language,
         IOutputReader reader,
@@ -71,15 +84,8 @@ public static class StudyRerun
         CancellationToken cancellation
     )
     {
-        var inputs = Path.Combine(held.Payload, "inputs");
         var recipe = Path.Combine(held.Payload, "recipe", held.RecipeName);
-        var request = new RunRequest(
-            recipe,
-            Directory.Exists(inputs) ? inputs : null,
-            again,
-            held.Settings,
-            Replace: false
-        );
+        var request = new RunRequest(recipe, inputs, again, held.Settings, Replace: false, held.ListInputsAbove);
         try
         {
             RecipeRun.Execute(request, language, observer, cancellation);
@@ -95,6 +101,16 @@ public static class StudyRerun
 
         return StudyComparison.Of(held, HeldStudy.Open(again), reader);
     }
+
+    /// <summary>Results that are not those of the audit are not this study's, however near their numbers.</summary>
+    private static RerunReport Weighed(RerunReport report, IReadOnlyList<Finding> odd) =>
+        report.Verdict == Verdict.SameValues && odd.Count > 0
+            ? report with
+            {
+                Verdict = Verdict.Differs,
+                Problems = [.. odd],
+            }
+            : report;
 
     private static RerunReport Unable(params ImmutableArray<Finding> problems) =>
         new() { Verdict = Verdict.CannotRerun, Problems = problems };

@@ -214,6 +214,7 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
                     "Setting",
                     "Title",
                     "Note",
+                    "Source",
                 ]
         )
         {
@@ -240,7 +241,14 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
 
     private IEnumerable<string> SameButForTheRun(string other)
     {
-        string[] ofTheRun = ["data/run.json", "manifest-sha256.txt", "tagmanifest-sha256.txt"];
+        string[] ofTheRun =
+        [
+            "bag-info.txt",
+            "data/ro-crate-metadata.json",
+            "data/run.json",
+            "manifest-sha256.txt",
+            "tagmanifest-sha256.txt",
+        ];
         var files = Directory
             .EnumerateFiles(demo.Folder, "*", SearchOption.AllDirectories)
             .Select(path => Path.GetRelativePath(demo.Folder, path))
