@@ -133,6 +133,9 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
     [InlineData("fly")]
     [InlineData("run x.csx --set year")]
     [InlineData("run x.csx --frobnicate")]
+    [InlineData("run x.csx --inputs some")]
+    [InlineData("run x.csx --listed-above 5")]
+    [InlineData("run x.csx --inputs listed --listed-above=-1")]
     public void What_is_not_understood_is_wrong_usage(string arguments)
     {
         using var tool = new Tool();
