@@ -7,6 +7,7 @@
 // refused. The daily column of that gauge is left out by taking its hours in its stead.
 Title("Quellmark: summer of 2024 with one hourly gauge");
 Note("Invented data for demonstration; nothing here was measured.");
+Source("*", "Invented for demonstration, made by data-demo/generate.py.", licence: "CC0-1.0");
 
 var grid = Crs("EPSG:32633");
 var basins = ReadBasins("basins.shp", id: "BASIN_ID", name: "NAME").To(grid);

@@ -5,6 +5,7 @@
 // Settings: water-year-starts (10)
 Title("Quellmark: rain by month and water year, October 2022 to September 2024");
 Note("Invented data for demonstration; nothing here was measured.");
+Source("*", "Invented for demonstration, made by data-demo/generate.py.", licence: "CC0-1.0");
 
 var grid = Crs("EPSG:32633");
 var basins = ReadBasins("basins.shp", id: "BASIN_ID", name: "NAME").To(grid);

@@ -8,6 +8,7 @@ var first = Setting("first", "2024-01-08");
 var last = Setting("last", "2024-01-12");
 Title($"Quellmark: the storm of {first} to {last}");
 Note("Invented data for demonstration; nothing here was measured.");
+Source("*", "Invented for demonstration, made by data-demo/generate.py.", licence: "CC0-1.0");
 
 var grid = Crs("EPSG:32633");
 var basins = ReadBasins("basins.shp", id: "BASIN_ID", name: "NAME").To(grid);

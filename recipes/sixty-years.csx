@@ -12,6 +12,7 @@ var waterYear = Every.WaterYear(firstMonth: Setting("water-year-starts", 10));
 var enough = Within.Kilometres(Setting("within-km", 15.0));
 Title("Quellmark: sixty years of daily rain, 1964 to 2024");
 Note("Invented data for demonstration; nothing here was measured.");
+Source("*", "Invented for demonstration, made by data-demo/generate.py.", licence: "CC0-1.0");
 
 var grid = Crs("EPSG:32633");
 var basins = ReadBasins("basins.shp", id: "BASIN_ID", name: "NAME").To(grid);

@@ -8,6 +8,7 @@ var year = Setting("year", 2023);
 var wetFrom = Setting("wet-from-mm", 1.0);
 Title($"Quellmark: wet days of {year}");
 Note("Invented data for demonstration; nothing here was measured.");
+Source("*", "Invented for demonstration, made by data-demo/generate.py.", licence: "CC0-1.0");
 
 var grid = Crs("EPSG:32633");
 var basins = ReadBasins("basins.shp", id: "BASIN_ID", name: "NAME").To(grid);

@@ -5,9 +5,10 @@ set -euo pipefail
 cd "$(dirname "$0")/.."
 export DOTNET_CLI_TELEMETRY_OPTOUT=1 DOTNET_NOLOGO=1
 
-# General-purpose readers of the emitted layers, and a browser for the summary page.
-need=(python3-fiona python3-pyproj python3-shapely chromium)
+# General-purpose readers of the emitted layers, a browser for the summary page, a validator of JSON schemas, OpenSSH.
+need=(python3-fiona python3-pyproj python3-shapely chromium python3-jsonschema openssh-client)
 missing=()
+command -v npm >/dev/null || missing+=(nodejs npm)
 ldconfig -p | grep -q libicuuc || missing+=(libicu-dev)
 for package in "${need[@]}"; do
   dpkg-query -W -f='${Status}' "$package" 2>/dev/null | grep -q 'ok installed' || missing+=("$package")
@@ -17,6 +18,9 @@ if [ ${#missing[@]} -gt 0 ]; then
   $sudo apt-get update -qq
   DEBIAN_FRONTEND=noninteractive $sudo apt-get install -y -qq "${missing[@]}" >/dev/null
 fi
+
+# Readers of RO-Crates and JSON-LD, pinned by tests/crate-reader/package-lock.json.
+npm ci --prefix tests/crate-reader --ignore-scripts --no-audit --no-fund
 
 dotnet tool restore
 dotnet csharpier check src tests

@@ -22,9 +22,16 @@ public sealed class RecipeVerbs
     /// <param name="text">A few words: the region, the time, the question.</param>
     public void Title(string text) => study.Title(text);
 
-    /// <summary>Adds a sentence to the summary: a purpose, an assumption, the source and licence of data.</summary>
+    /// <summary>Adds a sentence to the summary: a purpose, an assumption, a remark.</summary>
     /// <param name="text">A whole sentence.</param>
     public void Note(string text) => study.Note(text);
+
+    /// <summary>States where data come from, and under which licence; summary, audit and crate carry it.</summary>
+    /// <param name="file">The file as the recipe reads it; with * or ? in its name, all files that fit, such as <c>basins.*</c>.</param>
+    /// <param name="text">Who made the data and where they were had.</param>
+    /// <param name="licence">The licence: its SPDX identifier such as <c>CC-BY-4.0</c>, its address, or its words.</param>
+    /// <exception cref="RefusedException">The recipe reads no such file.</exception>
+    public void Source(string file, string text, string? licence = null) => study.Source(file, text, licence);
 
     /// <summary>Declares a setting with its default; <c>--set name=value</c> overrides it.</summary>
     /// <typeparam name="T">Text, a whole number, a number, or yes/no.</typeparam>

@@ -23,7 +23,7 @@ public sealed class TrialStudy(string dataFolder) : IStudy
     /// <summary>Files that steps created, by path.</summary>
     public Dictionary<string, MemoryStream> Outputs { get; } = new(StringComparer.Ordinal);
 
-    /// <summary>Titles and notes, in order.</summary>
+    /// <summary>Titles, notes and sources, in order.</summary>
     public List<string> Said { get; } = [];
 
     /// <summary>The door of a step, for tests that open files again.</summary>
@@ -51,6 +51,10 @@ public sealed class TrialStudy(string dataFolder) : IStudy
 
     /// <inheritdoc/>
     public void Note(string text) => Said.Add(text);
+
+    /// <inheritdoc/>
+    public void Source(string file, string text, string? licence) =>
+        Said.Add($"{file}: {text}{(licence is null ? "" : $" ({licence})")}");
 
     /// <inheritdoc/>
     public T Setting<T>(string name, T @default)

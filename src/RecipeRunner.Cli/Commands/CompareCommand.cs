@@ -44,8 +44,18 @@ internal sealed class CompareCommand(Screen screen) : Command<CompareCommand.Opt
             () =>
             {
                 NewFile.Require(settings.Table, settings.Page);
-                using var was = StudyReplay.Of(settings.First, Kitchen.Language, observer, cancellationToken);
-                using var now = StudyReplay.Of(settings.Second, Kitchen.Language, observer, cancellationToken);
+                using var was = StudyReplay.Of(
+                    new RerunRequest(settings.First),
+                    Kitchen.Language,
+                    observer,
+                    cancellationToken
+                );
+                using var now = StudyReplay.Of(
+                    new RerunRequest(settings.Second),
+                    Kitchen.Language,
+                    observer,
+                    cancellationToken
+                );
                 var difference = TwoStudies.Compare(was, now);
                 foreach (var line in DifferenceText.Of(difference, settings.First, settings.Second))
                 {

@@ -14,7 +14,7 @@ internal static class NewFile
         foreach (var path in paths.OfType<string>().Where(Path.Exists))
         {
             problems.Add(
-                "RR0830",
+                "RR0840",
                 new Place(path),
                 "Something of this name is there. It is left as it is.",
                 "Give another name."

@@ -15,6 +15,14 @@ internal sealed class RerunCommand(Screen screen) : Command<RerunCommand.Options
         [Description("The study's folder.")]
         public required string Study { get; init; }
 
+        [CommandOption("--data <DIR>")]
+        [Description("The folder that has all of the study's inputs, where the study lists some without holding them.")]
+        public string? Data { get; init; }
+
+        [CommandOption("--signers <FILE>")]
+        [Description("A list of allowed signers, as ssh-keygen reads it; one of them must have signed the study.")]
+        public string? Signers { get; init; }
+
         [CommandOption("--report <FILE>")]
         [Description("Write the findings as one page for people to attach. The file may not exist yet.")]
         public string? Report { get; init; }
@@ -38,7 +46,7 @@ internal sealed class RerunCommand(Screen screen) : Command<RerunCommand.Options
             {
                 NewFile.Require(settings.Report);
                 var report = StudyRerun.Of(
-                    settings.Study,
+                    new RerunRequest(settings.Study, settings.Data, settings.Signers),
                     Kitchen.Language,
                     new OutputReader(),
                     new QuietObserver(screen),

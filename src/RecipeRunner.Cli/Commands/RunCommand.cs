@@ -33,6 +33,22 @@ internal sealed class RunCommand(Screen screen) : Command<RunCommand.Options>
         [Description("Put the new study in the place of one that lies there, once it is complete.")]
         public bool Replace { get; init; }
 
+        [CommandOption("--inputs <HOW>")]
+        [Description(
+            "copied: the study holds its inputs (default). listed: large ones are named by digest and size alone."
+        )]
+        public string Inputs { get; init; } = "copied";
+
+        [CommandOption("--listed-above <MB>")]
+        [Description(
+            "With --inputs listed: the size in megabytes above which inputs are listed; 0 lists all. Default: 100."
+        )]
+        public int? ListedAbove { get; init; }
+
+        [CommandOption("--sign <KEY>")]
+        [Description("Sign the study with this SSH key, by OpenSSH's ssh-keygen.")]
+        public string? Sign { get; init; }
+
         [CommandOption("--quiet")]
         [Description("Print the study's path alone.")]
         public bool Quiet { get; init; }
@@ -43,6 +59,16 @@ internal sealed class RunCommand(Screen screen) : Command<RunCommand.Options>
 
         public override ValidationResult Validate()
         {
+            if (Inputs is not ("copied" or "listed"))
+            {
+                return ValidationResult.Error($"--inputs {Inputs}: say copied or listed.");
+            }
+
+            if (ListedAbove is { } above && (above < 0 || Inputs is "copied"))
+            {
+                return ValidationResult.Error("--listed-above: give a size from 0 up, together with --inputs listed.");
+            }
+
             var odd = Set.FirstOrDefault(text => text.IndexOf('=', StringComparison.Ordinal) < 1);
             if (odd is not null)
             {
@@ -54,6 +80,8 @@ internal sealed class RunCommand(Screen screen) : Command<RunCommand.Options>
                 ? ValidationResult.Success()
                 : ValidationResult.Error($"--set gives {twin.Key} more than once.");
         }
+
+        public long? ListInputsAbove => Inputs is "listed" ? (ListedAbove ?? 100) * 1_000_000L : null;
 
         public ImmutableSortedDictionary<string, string> Settings =>
             Set.ToImmutableSortedDictionary(
@@ -72,7 +100,9 @@ internal sealed class RunCommand(Screen screen) : Command<RunCommand.Options>
             settings.Data,
             settings.Into,
             settings.Settings,
-            settings.Replace
+            settings.Replace,
+            settings.ListInputsAbove,
+            settings.Sign
         );
         var printer = new RunPrinter(screen, settings.Quiet);
         return ErrorPrinter.Guard(

@@ -30,6 +30,10 @@ internal sealed class TraceCommand(Screen screen) : Command<TraceCommand.Options
         [Description("A column of the table.")]
         public string? Column { get; init; }
 
+        [CommandOption("--data <DIR>")]
+        [Description("The folder that has all of the study's inputs, where the study lists some without holding them.")]
+        public string? Data { get; init; }
+
         [CommandOption("--step <NUMBER>")]
         [Description("The step that gave the series, where the study has several. Default: the first.")]
         public int? Step { get; init; }
@@ -55,7 +59,12 @@ internal sealed class TraceCommand(Screen screen) : Command<TraceCommand.Options
             settings.Details,
             () =>
             {
-                using var replay = StudyReplay.Of(settings.Study, Kitchen.Language, observer, cancellationToken);
+                using var replay = StudyReplay.Of(
+                    new RerunRequest(settings.Study, settings.Data),
+                    Kitchen.Language,
+                    observer,
+                    cancellationToken
+                );
                 var cell = settings.Column is { } column
                     ? new TableTrace(replay).Of(settings.Basin, settings.Time, column)
                     : null;

@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using System.Text.Json;
+using RecipeRunner.Host.Running;
 using RecipeRunner.Host.Sealing;
 using RecipeRunner.Model.Steps;
 
@@ -32,6 +33,17 @@ public sealed class HeldStudy
                 StringComparer.Ordinal
             );
         Steps = [.. audit.GetProperty("journal").EnumerateArray().Select(StepOf)];
+        Inputs =
+        [
+            .. audit
+                .GetProperty("inputs")
+                .EnumerateArray()
+                .Select(input => FileOf(input) with { IsHeld = input.GetProperty("held").GetBoolean() }),
+        ];
+        RecipeFiles = [.. audit.GetProperty("recipe_files").EnumerateArray().Select(FileOf)];
+        Results = [.. audit.GetProperty("outputs").EnumerateArray().Select(FileOf)];
+        var above = audit.GetProperty("inputs_listed_above");
+        ListInputsAbove = above.ValueKind == JsonValueKind.Null ? null : above.GetInt64();
         Outputs =
         [
             .. audit.GetProperty("outputs").EnumerateArray().Select(file => file.GetProperty("path").GetString()!),
@@ -55,6 +67,18 @@ public sealed class HeldStudy
 
     /// <summary>The steps that ran.</summary>
     public ImmutableArray<HeldStep> Steps { get; }
+
+    /// <summary>The input files that were read, held or listed.</summary>
+    public ImmutableArray<FileRecord> Inputs { get; }
+
+    /// <summary>The recipe and the files that it loads.</summary>
+    public ImmutableArray<FileRecord> RecipeFiles { get; }
+
+    /// <summary>Layers and tables with what the audit says of them.</summary>
+    public ImmutableArray<FileRecord> Results { get; }
+
+    /// <summary>Inputs of more bytes than this are listed, not held; null where all are held.</summary>
+    public long? ListInputsAbove { get; }
 
     /// <summary>Layers and tables, relative to the payload.</summary>
     public ImmutableArray<string> Outputs { get; }
@@ -104,6 +128,13 @@ public sealed class HeldStudy
             );
         }
     }
+
+    private static FileRecord FileOf(JsonElement file) =>
+        new(
+            file.GetProperty("path").GetString()!,
+            file.GetProperty("bytes").GetInt64(),
+            file.GetProperty("sha256").GetString()!
+        );
 
     private static HeldStep StepOf(JsonElement step) =>
         new(

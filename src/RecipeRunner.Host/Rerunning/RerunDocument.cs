@@ -37,16 +37,7 @@ public static class RerunDocument
         }
 
         page.Raw("</dl>").Element("p class=\"caution\"", Caution.Text).Element("h2", "Reasons");
-        var reasons = RerunWords.Reasons(report).ToArray();
-        if (reasons.Length == 0)
-        {
-            page.Element("p", "Every file but the run's own clock and machine has the same bytes.");
-        }
-        else
-        {
-            page.Table("What was found, the weightiest first", ["about", "finding"], reasons.Select(Cells));
-        }
-
+        page.Table("What was found", ["about", "finding"], RerunWords.Reasons(report).Select(Cells));
         return page.Element(
                 "p",
                 "The seal was checked byte by byte; the enclosed recipe was run on the enclosed inputs in a place of its own; nothing was written into the study."
@@ -66,6 +57,14 @@ public static class RerunDocument
             ["title"] = report.Title,
             ["made_with"] = report.MadeWith,
             ["rerun_with"] = $"Recipe Runner {ToolVersion.Text}",
+            ["signer"] = report.Signer is { } signer
+                ? new JsonObject
+                {
+                    ["key_type"] = signer.KeyType,
+                    ["fingerprint"] = signer.Fingerprint,
+                    ["identity"] = signer.Identity,
+                }
+                : null,
             ["tolerance"] = RerunReport.Tolerance,
             ["files_compared"] = report.Files.Compared,
             ["files_same"] = report.Files.Same,

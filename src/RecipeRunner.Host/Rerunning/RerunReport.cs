@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using RecipeRunner.Host.Signing;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Host.Rerunning;
@@ -49,6 +50,9 @@ public sealed record RerunReport
 
     /// <summary>The tool that made the study; empty where it could not be read.</summary>
     public string MadeWith { get; init; } = "";
+
+    /// <summary>Who signed the study; null where nobody did, or where it cannot be rerun.</summary>
+    public Signer? Signer { get; init; }
 
     /// <summary>What kept it from being rerun.</summary>
     public ImmutableArray<Finding> Problems { get; init; } = [];

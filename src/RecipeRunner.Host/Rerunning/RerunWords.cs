@@ -1,4 +1,5 @@
 using System.Globalization;
+using RecipeRunner.Host.Signing;
 
 namespace RecipeRunner.Host.Rerunning;
 
@@ -39,6 +40,11 @@ public static class RerunWords
             yield return (problem.Code, $"{problem.Where}: {problem.What} {problem.Mend}".TrimEnd());
         }
 
+        if (report.Verdict != Rerunning.Verdict.CannotRerun)
+        {
+            yield return ("signed", Words(report.Signer));
+        }
+
         if (report.FirstStep is { } step)
         {
             yield return ("first", Text($"step {step.Number}, {step.Title} ({step.Line})"));
@@ -67,6 +73,11 @@ public static class RerunWords
             );
         }
     }
+
+    private static string Words(Signer? signer) =>
+        signer is null ? "not signed"
+        : signer.Identity is null ? $"by {signer.KeyType} {signer.Fingerprint}; whose key that is was not checked"
+        : $"by {signer.Identity}, {signer.KeyType} {signer.Fingerprint}";
 
     private static string Words(ValueDifference value) =>
         Text(

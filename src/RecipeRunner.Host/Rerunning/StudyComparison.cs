@@ -9,7 +9,13 @@ internal static class StudyComparison
     private const string Circumstances = "run.json";
 
     /// <summary>Files that name the version of the tool; where versions differ, these say nothing.</summary>
-    private static readonly string[] NamingTheTool = ["audit.json", "ro-crate-metadata.json", "summary.html"];
+    private static readonly string[] NamingTheTool =
+    [
+        "audit.json",
+        "audit.schema.json",
+        "ro-crate-metadata.json",
+        "summary.html",
+    ];
 
     /// <summary>The report.</summary>
     public static RerunReport Of(HeldStudy held, HeldStudy made, IOutputReader reader)
@@ -64,10 +70,12 @@ internal static class StudyComparison
         var (was, now) = (Path.Combine(held.Payload, file), Path.Combine(made.Payload, file));
         return File.Exists(was)
             && File.Exists(now)
-            && string.Equals(
-                FileDigest.Of(held.Payload, file).Sha256,
-                FileDigest.Of(made.Payload, file).Sha256,
-                StringComparison.Ordinal
+            && (
+                string.Equals(
+                    FileDigest.Of(held.Payload, file).Sha256,
+                    FileDigest.Of(made.Payload, file).Sha256,
+                    StringComparison.Ordinal
+                ) || TellingFile.SameButForDates(held, made, file)
             );
     }
 

@@ -1,6 +1,7 @@
 using RecipeRunner.Host.Running;
 using RecipeRunner.Host.Scripting;
 using RecipeRunner.Host.Sealing;
+using RecipeRunner.Host.Signing;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Host.Rerunning;
@@ -10,16 +11,24 @@ public sealed class StudyReplay : IDisposable
 {
     private readonly DirectoryInfo scratch;
 
-    private StudyReplay(HeldStudy held, StudyRecord record, string madeFolder, DirectoryInfo scratch)
+    private StudyReplay(HeldStudy held, Signer? signer, string? inputs, RunOutcome outcome, DirectoryInfo scratch)
     {
         Held = held;
-        Record = record;
-        MadeFolder = madeFolder;
+        Signer = signer;
+        InputFolder = inputs;
+        Record = outcome.Record;
+        MadeFolder = outcome.StudyFolder;
         this.scratch = scratch;
     }
 
     /// <summary>The study as it lies in its folder.</summary>
     public HeldStudy Held { get; }
+
+    /// <summary>Who signed it; null where nobody did.</summary>
+    public Signer? Signer { get; }
+
+    /// <summary>The folder that has its inputs; null where it read nothing.</summary>
+    public string? InputFolder { get; }
 
     /// <summary>What the run did, with all artifacts.</summary>
     public StudyRecord Record { get; }
@@ -27,41 +36,44 @@ public sealed class StudyReplay : IDisposable
     /// <summary>The study that it left.</summary>
     public string MadeFolder { get; }
 
-    /// <summary>Checks the seal and runs the enclosed recipe on the enclosed inputs. Nothing is written into the study.</summary>
-    /// <param name="folder">The study's folder.</param>
+    /// <summary>Checks seal and signature, and runs the enclosed recipe on the enclosed inputs. Nothing is written into the study.</summary>
+    /// <param name="request">The study, and where to find what it does not hold.</param>
     /// <param name="language">What its recipe may say.</param>
     /// <param name="observer">Told how it goes.</param>
     /// <param name="cancellation">Ends the run.</param>
-    /// <exception cref="RefusedException">There is no study, or its seal is broken.</exception>
+    /// <exception cref="RefusedException">There is no study, its seal or signature is broken, or inputs are not to be had.</exception>
     /// <exception cref="RecipeException">Its recipe failed.</exception>
     /// <exception cref="OperationCanceledException">The run was cancelled.</exception>
     public static StudyReplay Of(
-        string folder,
+        RerunRequest request,
         RecipeLanguage language,
         IRunObserver observer,
         CancellationToken cancellation
     )
     {
-        if (!Directory.Exists(folder))
-        {
-            throw new RefusedException(
-                Finding.Error("RR0801", new Place(folder), "There is no such folder.", "Name a study's folder.")
-            );
-        }
-
-        var broken = SealCheck.Of(folder, cancellation);
-        if (broken.Count > 0)
-        {
-            throw new RefusedException([.. broken]);
-        }
-
-        var held = HeldStudy.Open(folder);
+        RequireWhole(request.Folder, cancellation);
+        var signer = SealSignature.Check(request.Folder, request.Signers, cancellation);
+        var held = HeldStudy.Open(request.Folder);
+        ThrowIfAny([.. SealCheck.OfInfo(request.Folder, held.Title, held.Tool), .. AuditedFiles.OfCauses(held)]);
+        var inputs = RerunInputs.FolderOf(held, request.DataFolder);
         var place = Directory.CreateTempSubdirectory("recipe-runner-rerun-");
         try
         {
-            var made = Path.Combine(place.FullName, "again.study");
-            var outcome = RecipeRun.Execute(RequestOf(held, made), language, observer, cancellation);
-            return new StudyReplay(held, outcome.Record, made, place);
+            var run = new RunRequest(
+                Path.Combine(held.Payload, "recipe", held.RecipeName),
+                inputs,
+                Path.Combine(place.FullName, "again.study"),
+                held.Settings,
+                Replace: false,
+                held.ListInputsAbove
+            );
+            return new StudyReplay(
+                held,
+                signer,
+                inputs,
+                RecipeRun.Execute(run, language, observer, cancellation),
+                place
+            );
         }
         catch
         {
@@ -73,15 +85,23 @@ public sealed class StudyReplay : IDisposable
     /// <inheritdoc/>
     public void Dispose() => scratch.Delete(recursive: true);
 
-    private static RunRequest RequestOf(HeldStudy held, string made)
+    private static void RequireWhole(string folder, CancellationToken cancellation)
     {
-        var inputs = Path.Combine(held.Payload, "inputs");
-        return new RunRequest(
-            Path.Combine(held.Payload, "recipe", held.RecipeName),
-            Directory.Exists(inputs) ? inputs : null,
-            made,
-            held.Settings,
-            Replace: false
-        );
+        if (!Directory.Exists(folder))
+        {
+            throw new RefusedException(
+                Finding.Error("RR0801", new Place(folder), "There is no such folder.", "Name a study's folder.")
+            );
+        }
+
+        ThrowIfAny(SealCheck.Of(folder, cancellation));
+    }
+
+    private static void ThrowIfAny(IReadOnlyList<Finding> problems)
+    {
+        if (problems.Count > 0)
+        {
+            throw new RefusedException([.. problems]);
+        }
     }
 }

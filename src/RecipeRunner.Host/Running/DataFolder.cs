@@ -12,6 +12,9 @@ public sealed class DataFolder
 
     private DataFolder(string path) => this.path = path;
 
+    /// <summary>The folder's own full path.</summary>
+    internal string Root => path;
+
     /// <summary>The data folder at a path.</summary>
     /// <exception cref="RefusedException">There is no such folder.</exception>
     public static DataFolder At(string path) =>

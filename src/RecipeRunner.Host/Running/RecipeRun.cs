@@ -1,5 +1,6 @@
 using RecipeRunner.Host.Scripting;
 using RecipeRunner.Host.Sealing;
+using RecipeRunner.Host.Signing;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Host.Running;
@@ -33,15 +34,17 @@ public static class RecipeRun
     {
         var clock = new RunClock();
         var recipe = RecipeText.Read(request.RecipePath);
+        var signer = SealSigner.Of(request.SigningKey, cancellation);
         var data = DataFolder.At(request.DataFolder ?? recipe.Folder);
         using var folder = StudyFolder.Begin(request.StudyFolder ?? recipe.Name + ".study", request.Replace);
         var compiled = RecipeCompiler.Compile(recipe, language, cancellation);
-        var inputs = new InputFiles(data, folder.Payload);
+        var inputs = new InputFiles(data, folder.Payload, request.ListInputsAbove);
         var outputs = new OutputFiles(folder.Payload);
         var settings = new RecipeSettings(request.Settings);
         var study = new RunStudy(inputs, outputs, settings, observer, cancellation);
         compiled.Run(language.CreateVerbs(study), cancellation);
         settings.ThrowWhereUnknown();
+        inputs.ThrowWhereChanged(cancellation);
         var record = new StudyRecord
         {
             Title = study.GivenTitle ?? recipe.Name,
@@ -51,10 +54,12 @@ public static class RecipeRun
             Journal = study.Journal,
             RecipeFiles = RecipeFiles.Write(compiled, folder.Payload),
             Inputs = inputs.Records,
+            Sources = study.Sources,
+            ListInputsAbove = request.ListInputsAbove,
             Outputs = outputs.Records(),
         };
         StudyWriter.Write(record, folder.Payload, clock.Started, clock.Elapsed);
-        var files = folder.Seal(record.Title, cancellation);
+        var files = folder.Seal(record.Title, signer, cancellation);
         return new RunOutcome(folder.FinalPath, record, files, clock.Elapsed);
     }
 }

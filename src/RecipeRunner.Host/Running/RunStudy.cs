@@ -16,11 +16,15 @@ internal sealed class RunStudy(
 {
     private readonly List<JournalEntry> journal = [];
     private readonly List<string> notes = [];
+    private readonly StatedSources sources = new();
     private int running;
 
     public string? GivenTitle { get; private set; }
 
     public ImmutableArray<string> Notes => [.. notes];
+
+    /// <summary>The stated sources, checked against the files that were read.</summary>
+    public ImmutableArray<DataSource> Sources => sources.Of(inputs.Records);
 
     public ImmutableArray<JournalEntry> Journal => [.. journal];
 
@@ -64,6 +68,8 @@ internal sealed class RunStudy(
     }
 
     public void Note(string text) => notes.Add(text);
+
+    public void Source(string file, string text, string? licence) => sources.Add(file, text, licence);
 
     public T Setting<T>(string name, T @default)
         where T : notnull => settings.Use(name, @default);

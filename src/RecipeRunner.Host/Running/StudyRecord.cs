@@ -9,7 +9,12 @@ namespace RecipeRunner.Host.Running;
 /// <param name="Path">Relative to the study's payload, with forward slashes.</param>
 /// <param name="Bytes">Its size.</param>
 /// <param name="Sha256">Its digest, lower-case hexadecimal.</param>
-public sealed record FileRecord(string Path, long Bytes, string Sha256);
+/// <param name="IsHeld">False for an input that the study names by digest and size without holding it.</param>
+public sealed record FileRecord(string Path, long Bytes, string Sha256, bool IsHeld = true)
+{
+    /// <summary>The path within its folder of the payload: for an input, the name by which the recipe reads it.</summary>
+    public string Name => Path[(Path.IndexOf('/', StringComparison.Ordinal) + 1)..];
+}
 
 /// <summary>A setting as it was used.</summary>
 /// <param name="Name">Its name.</param>
@@ -40,6 +45,12 @@ public sealed record StudyRecord
 
     /// <summary>Input files, in ordinal order of their paths.</summary>
     public required ImmutableArray<FileRecord> Inputs { get; init; }
+
+    /// <summary>Where the data come from, as the recipe states it, in its order.</summary>
+    public required ImmutableArray<DataSource> Sources { get; init; }
+
+    /// <summary>Inputs of more bytes than this are listed, not held; null where all are held.</summary>
+    public required long? ListInputsAbove { get; init; }
 
     /// <summary>Layers and tables, in ordinal order of their paths.</summary>
     public required ImmutableArray<FileRecord> Outputs { get; init; }

@@ -69,19 +69,24 @@ public sealed class CompiledRecipe
     private RecipeException Explain(Exception failure)
     {
         var line = RecipeStack.LineOf(failure);
-        var problems = failure is RefusedException refused
-            ? refused.Problems
-            :
-            [
-                Finding.Error(
-                    "RR0110",
-                    new Place(),
-                    $"The recipe failed: {failure.Message} ({failure.GetType().Name})",
-                    "Mend the line above, or what it is given."
-                ),
-            ];
+        var problems = failure is RefusedException refused ? refused.Problems : [ProblemOf(failure)];
         return new RecipeException([.. problems.Select(problem => Locate(problem, line))], failure);
     }
+
+    private static Finding ProblemOf(Exception failure) =>
+        failure is IOException or UnauthorizedAccessException
+            ? Finding.Error(
+                "RR0704",
+                new Place(),
+                failure.Message,
+                "Check that the folders can be read and written, and that the disk has room."
+            )
+            : Finding.Error(
+                "RR0110",
+                new Place(),
+                $"The recipe failed: {failure.Message} ({failure.GetType().Name})",
+                "Mend the line above, or what it is given."
+            );
 
     private RecipeProblem Locate(Finding problem, RecipeLine? line)
     {

@@ -1,6 +1,7 @@
 using System.Text.Json.Nodes;
 using RecipeRunner.Host.Running;
 using RecipeRunner.Host.Summarising;
+using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Host.Sealing;
@@ -9,7 +10,10 @@ namespace RecipeRunner.Host.Sealing;
 internal static class AuditDocument
 {
     /// <summary>The version of the audit's form. It changes when a reader of the old form would misread the new one.</summary>
-    public const int Form = 1;
+    public const int Form = 2;
+
+    /// <summary>The facts by which steps state a datum operation with its accuracy.</summary>
+    private static readonly string[] DatumFacts = ["datum", "positions"];
 
     public static JsonObject Of(StudyRecord record) =>
         new()
@@ -23,7 +27,11 @@ internal static class AuditDocument
             ["recipe"] = record.RecipeName,
             ["settings"] = Array(record.Settings.Select(Setting)),
             ["recipe_files"] = Array(record.RecipeFiles.Select(FileEntry)),
-            ["inputs"] = Array(record.Inputs.Select(FileEntry)),
+            ["inputs"] = Array(record.Inputs.Select(InputFile)),
+            ["inputs_listed_above"] = record.ListInputsAbove,
+            ["sources"] = Array(record.Sources.Select(SourceEntry)),
+            ["reference_systems"] = Array(ReferenceSystems(record).Select(ReferenceSystemEntry)),
+            ["datum_operations"] = Array(record.Journal.SelectMany(DatumOperations)),
             ["journal"] = Array(record.Journal.Select(Entry)),
             ["findings"] = Array(
                 record.Journal.SelectMany(entry => entry.Findings.Select(finding => FindingOf(entry, finding)))
@@ -46,6 +54,51 @@ internal static class AuditDocument
             ["bytes"] = file.Bytes,
             ["sha256"] = file.Sha256,
         };
+
+    private static JsonObject InputFile(FileRecord file)
+    {
+        var node = FileEntry(file);
+        node["held"] = file.IsHeld;
+        return node;
+    }
+
+    private static JsonObject SourceEntry(DataSource source) =>
+        new()
+        {
+            ["file"] = source.File,
+            ["text"] = source.Text,
+            ["licence"] = source.Licence,
+            ["inputs"] = Array(source.Inputs.Select(input => JsonValue.Create(input))),
+        };
+
+    /// <summary>The systems in which the study's basins and gauges lay, in the order in which they first came up.</summary>
+    private static IEnumerable<ReferenceSystem> ReferenceSystems(StudyRecord record) =>
+        record
+            .Journal.Select(entry => entry.Output)
+            .Select(output =>
+                output switch
+                {
+                    BasinLayer basins => basins.ReferenceSystem,
+                    GaugeNetwork gauges => gauges.ReferenceSystem,
+                    _ => null,
+                }
+            )
+            .OfType<ReferenceSystem>()
+            .DistinctBy(system => system.Label, StringComparer.Ordinal);
+
+    private static JsonObject ReferenceSystemEntry(ReferenceSystem system) =>
+        new()
+        {
+            ["code"] = system.Code,
+            ["name"] = system.Name,
+            ["datum"] = system.Datum,
+            ["unit"] = system.UnitName,
+        };
+
+    private static IEnumerable<JsonNode> DatumOperations(JournalEntry entry) =>
+        entry
+            .Statements.Where(statement => DatumFacts.Contains(statement.Name, StringComparer.Ordinal))
+            .Select(statement => new JsonObject { ["step"] = entry.Number, ["operation"] = statement.Value });
 
     private static JsonObject Entry(JournalEntry entry) =>
         new()

@@ -15,19 +15,27 @@ internal static class Bag
     private static readonly UTF8Encoding Utf8 = new(encoderShouldEmitUTF8Identifier: false);
 
     /// <summary>Writes the bag's own files around the payload that is there.</summary>
-    /// <returns>The number of files in the bag.</returns>
-    public static int Seal(string folder, string title, CancellationToken cancellation)
+    public static void Seal(string folder, string title, CancellationToken cancellation)
     {
         Write(folder, "bagit.txt", Declaration);
-        Write(
-            folder,
-            "bag-info.txt",
-            $"External-Description: {Plain(title)}\nBag-Software-Agent: Recipe Runner {ToolVersion.Text}\n"
-        );
-        var payload = Payload(folder);
-        Write(folder, "manifest-sha256.txt", Manifest(folder, payload, cancellation));
+        Write(folder, "bag-info.txt", Info(folder, title, $"Recipe Runner {ToolVersion.Text}"));
+        Write(folder, "manifest-sha256.txt", Manifest(folder, Payload(folder), cancellation));
         Write(folder, "tagmanifest-sha256.txt", Manifest(folder, TagFiles, cancellation));
-        return payload.Length + TagFiles.Length + 1;
+    }
+
+    /// <summary>
+    /// What <c>bag-info.txt</c> says, whole (RFC 8493, section 2.2.2). It has no Bagging-Date: the crate and <c>run.json</c> tell
+    /// when the study was made.
+    /// </summary>
+    /// <param name="folder">The bag.</param>
+    /// <param name="title">The study's title.</param>
+    /// <param name="tool">The tool that made it, with its version.</param>
+    public static string Info(string folder, string title, string tool)
+    {
+        var sizes = Payload(folder).Select(path => new FileInfo(Path.Combine(folder, path)).Length).ToArray();
+        return FormattableString.Invariant(
+            $"Bag-Software-Agent: {tool}\nExternal-Description: {Plain(title)}\nPayload-Oxum: {sizes.Sum()}.{sizes.Length}\n"
+        );
     }
 
     /// <summary>The payload files of a bag, in ordinal order.</summary>
@@ -53,7 +61,8 @@ internal static class Bag
             .Replace("\r", "%0D", StringComparison.Ordinal)
             .Replace("\n", "%0A", StringComparison.Ordinal);
 
-    private static string Plain(string title) => title.ReplaceLineEndings(" ");
+    /// <summary>A label's value is one line, and readers may trim it.</summary>
+    private static string Plain(string title) => title.ReplaceLineEndings(" ").Trim();
 
     private static void Write(string folder, string name, string text) =>
         File.WriteAllText(Path.Combine(folder, name), text, Utf8);

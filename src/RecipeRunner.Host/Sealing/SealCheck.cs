@@ -1,3 +1,5 @@
+using System.Text;
+using RecipeRunner.Host.Signing;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Host.Sealing;
@@ -21,7 +23,37 @@ internal static class SealCheck
         problems.AddRange(Declaration(folder));
         problems.AddRange(Compared(folder, "tagmanifest-sha256.txt", [.. Bag.TagFiles], cancellation));
         problems.AddRange(Compared(folder, "manifest-sha256.txt", Bag.Payload(folder), cancellation));
-        return problems;
+        return problems.Count > 0 ? problems : Signature(folder, cancellation);
+    }
+
+    /// <summary>What is wrong with the words of <c>bag-info.txt</c>, which no manifest of the payload covers.</summary>
+    /// <param name="folder">The study's folder.</param>
+    /// <param name="title">The study's title.</param>
+    /// <param name="tool">The tool that made it, with its version.</param>
+    public static IReadOnlyList<Finding> OfInfo(string folder, string title, string tool) =>
+        string.Equals(Text(folder, "bag-info.txt"), Bag.Info(folder, title, tool), StringComparison.Ordinal)
+            ? []
+            :
+            [
+                Finding.Error(
+                    "RR0830",
+                    new Place("bag-info.txt"),
+                    "It does not say what a seal of this study says: the tool, the title, and the size of the payload."
+                ),
+            ];
+
+    /// <summary>A signature is not needed, but one that lies there must be of this seal.</summary>
+    private static IReadOnlyList<Finding> Signature(string folder, CancellationToken cancellation)
+    {
+        try
+        {
+            SealSignature.Check(folder, signers: null, cancellation);
+            return [];
+        }
+        catch (RefusedException refused)
+        {
+            return refused.Problems;
+        }
     }
 
     private static IEnumerable<Finding> Structure(string folder)
@@ -42,7 +74,10 @@ internal static class SealCheck
             yield return Finding.Error("RR0801", new Place(missing), "A study has this file; it is not there.");
         }
 
-        var allowed = needed.Append("data").Select(name => name.Split('/')[0]).ToHashSet(StringComparer.Ordinal);
+        var allowed = needed
+            .Append(SealSignature.FileName)
+            .Select(name => name.Split('/')[0])
+            .ToHashSet(StringComparer.Ordinal);
         foreach (
             var strange in Directory
                 .EnumerateFileSystemEntries(folder)
@@ -68,13 +103,7 @@ internal static class SealCheck
 
     private static IEnumerable<Finding> Declaration(string folder)
     {
-        if (
-            !string.Equals(
-                File.ReadAllText(Path.Combine(folder, "bagit.txt")),
-                Bag.Declaration,
-                StringComparison.Ordinal
-            )
-        )
+        if (!string.Equals(Text(folder, "bagit.txt"), Bag.Declaration, StringComparison.Ordinal))
         {
             yield return Finding.Error(
                 "RR0802",
@@ -84,6 +113,10 @@ internal static class SealCheck
         }
     }
 
+    /// <summary>A file's text, byte for byte: a byte order mark counts.</summary>
+    private static string Text(string folder, string file) =>
+        Encoding.UTF8.GetString(File.ReadAllBytes(Path.Combine(folder, file)));
+
     /// <summary>Compares a manifest with the one that the files would have now.</summary>
     private static IEnumerable<Finding> Compared(
         string folder,
@@ -92,10 +125,7 @@ internal static class SealCheck
         CancellationToken cancellation
     )
     {
-        var (held, made) = (
-            File.ReadAllText(Path.Combine(folder, manifest)),
-            Bag.Manifest(folder, files, cancellation)
-        );
+        var (held, made) = (Text(folder, manifest), Bag.Manifest(folder, files, cancellation));
         if (string.Equals(held, made, StringComparison.Ordinal))
         {
             return [];

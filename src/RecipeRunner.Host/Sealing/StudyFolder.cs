@@ -1,3 +1,4 @@
+using RecipeRunner.Host.Signing;
 using RecipeRunner.Model.Steps;
 
 namespace RecipeRunner.Host.Sealing;
@@ -58,11 +59,13 @@ internal sealed class StudyFolder : IDisposable
         }
     }
 
-    /// <summary>Writes the seal and moves the study to its place.</summary>
+    /// <summary>Writes the seal, has it signed where there is a signer, and moves the study to its place.</summary>
     /// <returns>The number of files in the study.</returns>
-    public int Seal(string title, CancellationToken cancellation)
+    public int Seal(string title, SealSigner? signer, CancellationToken cancellation)
     {
-        var files = Bag.Seal(Built, title, cancellation);
+        Bag.Seal(Built, title, cancellation);
+        signer?.Sign(Built, cancellation);
+        var files = FileDigest.PathsBelow(Built).Count();
         cancellation.ThrowIfCancellationRequested();
         if (Directory.Exists(FinalPath))
         {

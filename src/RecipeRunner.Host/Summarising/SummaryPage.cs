@@ -32,6 +32,7 @@ internal static class SummaryPage
         }
 
         StepsSection(page, record);
+        SourcesSection(page, record);
         CautionSection(page, record);
         FilesSection(page, record);
         RerunSection(page, record);
@@ -121,6 +122,26 @@ internal static class SummaryPage
         ];
     }
 
+    private static void SourcesSection(Html page, StudyRecord record)
+    {
+        page.Element("h2", "Where the data come from");
+        if (!record.Sources.IsEmpty)
+        {
+            page.Table(
+                "Sources, as the recipe states them",
+                ["data", "source", "licence"],
+                record.Sources.Select(source => (string[])[source.File, source.Text, source.Licence ?? "not stated"])
+            );
+        }
+
+        var stated = record.Sources.SelectMany(source => source.Inputs).ToHashSet(StringComparer.Ordinal);
+        var silent = record.Inputs.Where(input => !stated.Contains(input.Path)).Select(input => input.Name).ToArray();
+        if (silent.Length > 0)
+        {
+            page.Element("p", $"The recipe states no source of {string.Join(", ", silent)}.");
+        }
+    }
+
     private static void CautionSection(Html page, StudyRecord record)
     {
         page.Element("h2", "Assumptions and caution").Raw("<ul>");
@@ -139,16 +160,18 @@ internal static class SummaryPage
         page.Table(
             "Recipe, data and results, with their SHA-256 digests",
             ["file", ">bytes", "SHA-256"],
-            files.Select(file => (string[])[file.Path, Html.Number(file.Bytes, "N0"), file.Sha256])
+            files.Select(file => (string[])[NameOf(file), Html.Number(file.Bytes, "N0"), file.Sha256])
         );
     }
+
+    private static string NameOf(FileRecord file) => file.IsHeld ? file.Path : $"{file.Name} (not held by this study)";
 
     private static void RerunSection(Html page, StudyRecord record)
     {
         page.Element("h2", "How to check and repeat it");
         page.Element(
             "p",
-            "In the study's folder, sha256sum -c manifest-sha256.txt verifies every file. The recipe and the data are inside; this runs them again, to compare file by file:"
+            $"In the study's folder, sha256sum -c manifest-sha256.txt verifies every file. {WhereInputsAre(record)} This runs the recipe again, to compare file by file:"
         );
         var settings = string.Concat(
             record
@@ -157,10 +180,22 @@ internal static class SummaryPage
         );
         page.Element(
             "pre",
-            $"recipe-runner run {ShellWord.Of($"data/recipe/{record.RecipeName}")} --data {(record.Inputs.IsEmpty ? "data/recipe" : "data/inputs")} --into ../again.study{settings}"
+            $"recipe-runner run {ShellWord.Of($"data/recipe/{record.RecipeName}")} --data {DataFolder(record)} --into ../again.study{settings}"
         );
         page.Element("p", $"Made with Recipe Runner {ToolVersion.Text}.");
     }
+
+    private static bool HoldsAll(StudyRecord record) => record.Inputs.All(input => input.IsHeld);
+
+    private static string WhereInputsAre(StudyRecord record) =>
+        HoldsAll(record)
+            ? "The recipe and the data are inside."
+            : "The recipe is inside; data too large to hold are listed with their digests, and DIR stands for the folder that has all of the data.";
+
+    private static string DataFolder(StudyRecord record) =>
+        record.Inputs.IsEmpty ? "data/recipe"
+        : HoldsAll(record) ? "data/inputs"
+        : "DIR";
 
     /// <summary>The style of all pages.</summary>
     internal static string Style()

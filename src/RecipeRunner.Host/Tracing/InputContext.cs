@@ -5,9 +5,9 @@ using RecipeRunner.Model.Steps;
 namespace RecipeRunner.Host.Tracing;
 
 /// <summary>Lets a step look into a study's input files again; it writes nothing.</summary>
-internal sealed class InputContext(string payload, CancellationToken cancellation) : StepContext
+internal sealed class InputContext(string folder, CancellationToken cancellation) : StepContext
 {
-    private readonly DataFolder inputs = DataFolder.At(Path.Combine(payload, "inputs"));
+    private readonly DataFolder inputs = DataFolder.At(folder);
 
     public override CancellationToken Cancellation => cancellation;
 

@@ -119,7 +119,7 @@ public sealed class StudyTrace(StudyReplay replay, CancellationToken cancellatio
     private ImmutableArray<DepthOrigin> Origins(RainRecords rain, LocalDateTime label, ArealAccount account)
     {
         var step = rain.Times.IndexOf(label)!.Value;
-        var context = new InputContext(replay.Held.Payload, cancellation);
+        var context = new InputContext(replay.InputFolder!, cancellation);
         return
         [
             .. account.Shares.Select(share =>

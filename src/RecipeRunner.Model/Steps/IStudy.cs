@@ -16,6 +16,13 @@ public interface IStudy
     /// <summary>Adds a sentence to the summary: a purpose, an assumption, a source line.</summary>
     void Note(string text);
 
+    /// <summary>States where data come from, and under which licence.</summary>
+    /// <param name="file">An input file's name; with * or ? in its last part, all input files that fit.</param>
+    /// <param name="text">Who made the data and where they were had, in words that a reader can follow.</param>
+    /// <param name="licence">The licence: its SPDX identifier, its address, or its words; null where unknown.</param>
+    /// <exception cref="RefusedException">The words are missing, or when the run ends: it read no such file.</exception>
+    void Source(string file, string text, string? licence);
+
     /// <summary>The value of a setting: as the person who runs the recipe gave it, or else its default.</summary>
     /// <typeparam name="T"><see cref="string"/>, <see cref="int"/>, <see cref="double"/> or <see cref="bool"/>.</typeparam>
     /// <param name="name">Letters, digits, hyphens and underscores.</param>

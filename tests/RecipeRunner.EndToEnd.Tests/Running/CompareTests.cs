@@ -63,7 +63,7 @@ public sealed class CompareTests(DemoStudy demo) : IClassFixture<DemoStudy>
         page.ShouldContain("licensed professional");
         page.ShouldContain("Weights of the full network");
         tool.Run("compare", demo.Folder, "monthly-totals.study", "--table", "changes.csv")
-            .Errors.ShouldContain("RR0830");
+            .Errors.ShouldContain("RR0840");
     }
 
     [Fact]

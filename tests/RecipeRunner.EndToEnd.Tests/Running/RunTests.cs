@@ -133,6 +133,9 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
     [InlineData("fly")]
     [InlineData("run x.csx --set year")]
     [InlineData("run x.csx --frobnicate")]
+    [InlineData("run x.csx --inputs some")]
+    [InlineData("run x.csx --listed-above 5")]
+    [InlineData("run x.csx --inputs listed --listed-above=-1")]
     public void What_is_not_understood_is_wrong_usage(string arguments)
     {
         using var tool = new Tool();
@@ -214,6 +217,7 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
                     "Setting",
                     "Title",
                     "Note",
+                    "Source",
                 ]
         )
         {
@@ -240,7 +244,14 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
 
     private IEnumerable<string> SameButForTheRun(string other)
     {
-        string[] ofTheRun = ["data/run.json", "manifest-sha256.txt", "tagmanifest-sha256.txt"];
+        string[] ofTheRun =
+        [
+            "bag-info.txt",
+            "data/ro-crate-metadata.json",
+            "data/run.json",
+            "manifest-sha256.txt",
+            "tagmanifest-sha256.txt",
+        ];
         var files = Directory
             .EnumerateFiles(demo.Folder, "*", SearchOption.AllDirectories)
             .Select(path => Path.GetRelativePath(demo.Folder, path))

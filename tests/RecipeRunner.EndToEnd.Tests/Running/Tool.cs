@@ -1,4 +1,5 @@
 using System.Diagnostics;
+using System.Text.Json.Nodes;
 
 namespace RecipeRunner.EndToEnd.Tests.Running;
 
@@ -23,6 +24,19 @@ public sealed class Tool : IDisposable
         using var process = Start("dotnet", [Program, .. arguments], environment);
         return Wait(process);
     }
+
+    /// <summary>Runs the tool without its build's invariant culture: it then has the cultures of its environment.</summary>
+    public Said RunWithCultures((string Name, string Value)[] environment, params string[] arguments)
+    {
+        var settings = JsonNode.Parse(File.ReadAllText(Path.ChangeExtension(Program, ".runtimeconfig.json")))!;
+        settings["runtimeOptions"]!["configProperties"]!["System.Globalization.Invariant"] = false;
+        var config = Write("cultures.runtimeconfig.json", settings.ToJsonString());
+        using var process = Start("dotnet", ["exec", "--runtimeconfig", config, Program, .. arguments], environment);
+        return Wait(process);
+    }
+
+    /// <summary>Starts the tool and does not wait for it.</summary>
+    public Process Begin(params string[] arguments) => Start("dotnet", [Program, .. arguments], []);
 
     /// <summary>Runs the tool, and sends it a signal once a file appears.</summary>
     public Said RunAndInterrupt(string signal, Func<bool> when, params string[] arguments)

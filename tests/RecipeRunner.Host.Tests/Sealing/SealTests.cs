@@ -1,5 +1,6 @@
 using System.Security.Cryptography;
 using System.Text.Json;
+using RecipeRunner.Host.Sealing;
 using RecipeRunner.Host.Summarising;
 using RecipeRunner.Host.Tests.Support;
 
@@ -40,7 +41,14 @@ public sealed class SealTests : IDisposable
         var other = Path.Combine(bench.Folder, "other.study");
         bench.Run(Recipe, into: other);
 
-        string[] ofTheRun = ["data/run.json", "manifest-sha256.txt", "tagmanifest-sha256.txt"];
+        string[] ofTheRun =
+        [
+            "bag-info.txt",
+            "data/ro-crate-metadata.json",
+            "data/run.json",
+            "manifest-sha256.txt",
+            "tagmanifest-sha256.txt",
+        ];
         var files = Directory.EnumerateFiles(bench.Study, "*", SearchOption.AllDirectories).Select(Relative).ToArray();
         files.Length.ShouldBeGreaterThan(9);
         files
@@ -92,32 +100,20 @@ public sealed class SealTests : IDisposable
         File.ReadAllText(Path.Combine(bench.Study, "data/summary.html")).ShouldContain(expected);
     }
 
+    /// <summary>source: RFC 8493, section 2.2.2: Payload-Oxum is OctetCount.StreamCount of the payload.</summary>
     [Fact]
-    public void The_crate_describes_itself_and_lists_files_that_exist()
+    public void The_bags_info_tells_tool_title_and_the_size_of_the_payload()
     {
-        bench.Run(Recipe);
-        using var crate = JsonDocument.Parse(
-            File.ReadAllBytes(Path.Combine(bench.Study, "data/ro-crate-metadata.json"))
-        );
-        var graph = crate
-            .RootElement.GetProperty("@graph")
-            .EnumerateArray()
-            .ToDictionary(entity => entity.GetProperty("@id").GetString()!, StringComparer.Ordinal);
-
-        // source: RO-Crate 1.1 specification, "RO-Crate Metadata File Descriptor" and "Root Data Entity".
-        graph["ro-crate-metadata.json"]
-            .GetProperty("conformsTo")
-            .GetProperty("@id")
-            .GetString()
-            .ShouldBe("https://w3id.org/ro/crate/1.1");
-        graph["ro-crate-metadata.json"].GetProperty("about").GetProperty("@id").GetString().ShouldBe("./");
-        var parts = graph["./"]
-            .GetProperty("hasPart")
-            .EnumerateArray()
-            .Select(part => part.GetProperty("@id").GetString()!)
+        bench.Run("Title(\" two\\nlines \"); Write(Read(\"a.txt\"), \"tables/a.txt\");");
+        var payload = Directory
+            .EnumerateFiles(Path.Combine(bench.Study, "data"), "*", SearchOption.AllDirectories)
+            .Select(path => new FileInfo(path).Length)
             .ToArray();
-        parts.ShouldContain("tables/ab.txt");
-        parts.ShouldAllBe(part => graph.ContainsKey(part) && File.Exists(Path.Combine(bench.Study, "data", part)));
+
+        File.ReadAllText(Path.Combine(bench.Study, "bag-info.txt"))
+            .ShouldBe(
+                $"Bag-Software-Agent: Recipe Runner {ToolVersion.Text}\nExternal-Description: two lines\nPayload-Oxum: {payload.Sum()}.{payload.Length}\n"
+            );
     }
 
     private string[] Verify(string manifest) =>

@@ -93,6 +93,8 @@ public sealed class WordVerbs(IStudy study)
 
     public void Note(string text) => study.Note(text);
 
+    public void Source(string file, string text, string? licence = null) => study.Source(file, text, licence);
+
     public T Setting<T>(string name, T @default)
         where T : notnull => study.Setting(name, @default);
 

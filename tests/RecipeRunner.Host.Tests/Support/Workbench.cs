@@ -1,6 +1,9 @@
 using System.Collections.Immutable;
+using System.Text.Json.Nodes;
+using RecipeRunner.Host.Rerunning;
 using RecipeRunner.Host.Running;
 using RecipeRunner.Host.Scripting;
+using RecipeRunner.Host.Sealing;
 
 namespace RecipeRunner.Host.Tests.Support;
 
@@ -43,6 +46,8 @@ public sealed class Workbench : IDisposable
         string recipe,
         string? into = null,
         bool replace = false,
+        long? listAbove = null,
+        string? sign = null,
         CancellationToken cancellation = default,
         params (string Name, string Value)[] settings
     ) =>
@@ -52,12 +57,30 @@ public sealed class Workbench : IDisposable
                 DataFolder,
                 into ?? Study,
                 settings.ToImmutableSortedDictionary(s => s.Name, s => s.Value, StringComparer.Ordinal),
-                replace
+                replace,
+                listAbove,
+                sign
             ),
             Language,
             new SilentObserver(),
             cancellation
         );
+
+    public RerunReport Rerun(string? data = null, string? signers = null) =>
+        StudyRerun.Of(
+            new RerunRequest(Study, data, signers),
+            Language,
+            new NoReader(),
+            new SilentObserver(),
+            CancellationToken.None
+        );
+
+    /// <summary>Writes the manifests anew, as one would who edits a study and hides it.</summary>
+    public void Reseal()
+    {
+        var title = JsonNode.Parse(File.ReadAllBytes(Path.Combine(Study, "data/audit.json")))!["title"]!;
+        Bag.Seal(Study, title.GetValue<string>(), CancellationToken.None);
+    }
 
     public RecipeProblem Fail(string recipe) => Should.Throw<RecipeException>(() => Run(recipe)).Problems[0];
 
@@ -72,6 +95,11 @@ public sealed class Workbench : IDisposable
         ];
 
     public void Dispose() => Directory.Delete(Folder, recursive: true);
+
+    private sealed class NoReader : IOutputReader
+    {
+        public IEnumerable<OutputValue> Read(string path) => [];
+    }
 
     public sealed class SilentObserver : IRunObserver
     {
