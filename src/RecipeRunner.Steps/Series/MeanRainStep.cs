@@ -106,7 +106,7 @@ public sealed record MeanRainStep(WeightTable Weights, RainRecords Rain, GapPoli
                     "RR0514",
                     Place.Of("areal rainfall"),
                     FormattableString.Invariant(
-                        $"Of {steps} values a basin, some are withheld for want of gauges: {Listing.Of(sometimes)}."
+                        $"Of {Counted.Of(steps, "value")} a basin some are withheld for want of gauges: {Listing.Of(sometimes)}."
                     ),
                     ""
                 )

@@ -242,6 +242,30 @@ public sealed partial class RunTests(DemoStudy demo) : IClassFixture<DemoStudy>
         tool.Run("peek", demo.PathOf("layers/basins.geojson")).Output.ShouldContain("rain_mm");
     }
 
+    [Fact]
+    public void The_longest_series_is_counted_in_its_own_steps()
+    {
+        // hourly-Q-19.csv has a header and 92 days of 24 hours; the 731 days of daily.csv come first.
+        using var tool = new Tool();
+        var recipe = tool.Write(
+            "two.csx",
+            """
+            var grid = Crs("EPSG:32633");
+            var basins = ReadBasins("basins.shp", id: "BASIN_ID", name: "NAME").To(grid);
+            var gauges = ReadGauges("gauges.csv", id: "gauge", x: "lon", y: "lat", crs: Crs("EPSG:4326")).To(grid);
+            var weights = basins.WeighBy(gauges.ThiessenCells());
+            var daily = ReadRecords("daily.csv", RainUnit.Millimetres, TimeStep.Days(endingAt: "09:00"));
+            var hourly = ReadRecords("hourly-Q-19.csv", RainUnit.Millimetres, TimeStep.Hours());
+            EmitTable(weights.MeanRain(daily, GapPolicy.Redraw, AtLeast.Gauges(1)), "days");
+            EmitTable(weights.MeanRain(hourly, GapPolicy.Redraw, AtLeast.Gauges(1)), "hours");
+            """
+        );
+
+        var run = tool.Run("run", recipe, "--data", DemoStudy.Data);
+
+        run.Output.ShouldContain("\ntime       2,208 hours, 2 series\n", Case.Sensitive, run.Errors);
+    }
+
     private IEnumerable<string> SameButForTheRun(string other)
     {
         string[] ofTheRun =

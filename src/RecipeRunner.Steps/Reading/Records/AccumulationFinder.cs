@@ -126,7 +126,7 @@ internal sealed class AccumulationFinder
                         CultureInfo.InvariantCulture,
                         $"{Counted.Of(accumulations.Length, "value is a total", "values are totals")} of several steps; longest: {part.GaugeIds[longest.Gauge]} {part.Times.TextAt(longest.FirstStep)} to {part.Times.TextAt(longest.LastStep)} ({longest.LastStep - longest.FirstStep + 1})."
                     ),
-                    "Their steps count as silent until the totals are spread over them."
+                    "Steps of totals count as silent until the totals are spread over them."
                 )
             );
         }
@@ -140,7 +140,7 @@ internal sealed class AccumulationFinder
                     new Place(part.File),
                     string.Create(
                         CultureInfo.InvariantCulture,
-                        $"{Counted.Of(lost.Count, "span")} over which rain accumulated without a total that can be used, the first at {part.GaugeIds[gauge]}, {part.Times.TextAt(step)}: no value follows, it failed, its number of steps is not said, or other values stand within it."
+                        $"{Counted.Of(lost.Count, "span over which rain accumulated has", "spans over which rain accumulated have")} no total that can be used, the first at {part.GaugeIds[gauge]}, {part.Times.TextAt(step)}: no value follows, it failed, its number of steps is not said, or other values stand within it."
                     ),
                     "These steps stay without a value."
                 )
