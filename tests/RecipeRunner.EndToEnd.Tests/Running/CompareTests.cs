@@ -79,7 +79,7 @@ public sealed class CompareTests(DemoStudy demo) : IClassFixture<DemoStudy>
 
         var said = tool.Run("compare", demo.Folder, "monthly-totals.study", "--table", "changes.csv");
 
-        said.Output.ShouldContain("recipe   line 16:");
+        said.Output.ShouldContain("recipe   line 17:");
         var rows = File.ReadAllLines(tool.PathOf("changes.csv")).Skip(1).Select(line => line.Split(',')).ToArray();
         rows.Length.ShouldBeGreaterThan(100);
         rows.Count(row => string.Equals(string.Join(',', row[5..]), row[4] + ",0,0,0", StringComparison.Ordinal))
