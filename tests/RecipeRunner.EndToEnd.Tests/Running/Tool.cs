@@ -38,10 +38,10 @@ public sealed class Tool : IDisposable
     /// <summary>Starts the tool and does not wait for it.</summary>
     public Process Begin(params string[] arguments) => Start("dotnet", [Program, .. arguments], []);
 
-    /// <summary>Runs the tool, and sends it a signal once a file appears.</summary>
+    /// <summary>Runs the tool, and sends it a signal once a file appears; also where whoever runs the tests ignores SIGINT, as a job in the background does.</summary>
     public Said RunAndInterrupt(string signal, Func<bool> when, params string[] arguments)
     {
-        using var process = Start("dotnet", [Program, .. arguments], []);
+        using var process = Start("env", ["--default-signal=INT", "dotnet", Program, .. arguments], []);
         for (var tries = 0; !when() && tries < 600; tries++)
         {
             Thread.Sleep(50);
