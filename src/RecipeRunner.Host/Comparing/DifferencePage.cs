@@ -15,13 +15,8 @@ public static class DifferencePage
     /// <param name="now">The second.</param>
     public static string Of(StudyDifference difference, string was, string now)
     {
-        var page = new Html();
-        page.Raw("<!DOCTYPE html>")
-            .Raw(
-                "<html lang=\"en\"><head><meta charset=\"utf-8\"><meta name=\"viewport\" content=\"width=device-width\">"
-            )
-            .Element("title", $"What changed from {was} to {now}")
-            .Raw($"<style>\n{SummaryPage.Style()}</style></head><body><main>")
+        var page = PageFrame
+            .Open($"What changed from {was} to {now}")
             .Element("h1", "What changed between two studies")
             .Element("p", $"From {was} to {now}.")
             .Element("p class=\"caution\"", Caution.Text);
@@ -33,7 +28,7 @@ public static class DifferencePage
         Section(page, "Gauges", difference.Gauges);
         Section(page, "Basins", difference.Basins);
         Section(page, "Weights of the full network", difference.Weights);
-        return page.Raw("</main></body></html>").ToString();
+        return PageFrame.Close(page);
     }
 
     private static void RainSection(Html page, StudyDifference difference)

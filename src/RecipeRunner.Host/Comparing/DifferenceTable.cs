@@ -1,6 +1,7 @@
 using System.Globalization;
 using NodaTime;
 using NodaTime.Text;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Host.Comparing;
 
@@ -53,13 +54,10 @@ public static class DifferenceTable
 
     /// <summary>All changes as lines of CSV (RFC 4180).</summary>
     public static IEnumerable<string> Csv(StudyDifference difference) =>
-        difference.Rain.Select(change => string.Join(',', Row(change).Select(Quoted))).Prepend(string.Join(',', Heads));
+        difference.Rain.Select(change => CsvLine.Of(Row(change))).Prepend(CsvLine.Of(Heads));
 
     private static string Label(LocalDateTime label) =>
         label.TimeOfDay == LocalTime.Midnight ? LocalDatePattern.Iso.Format(label.Date) : Time.Format(label);
 
     private static decimal Written(double number) => Math.Round((decimal)number, 9);
-
-    private static string Quoted(string text) =>
-        text.AsSpan().ContainsAny(",\"\n\r") ? $"\"{text.Replace("\"", "\"\"", StringComparison.Ordinal)}\"" : text;
 }

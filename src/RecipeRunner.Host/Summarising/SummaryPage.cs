@@ -1,5 +1,4 @@
 using System.Globalization;
-using System.Reflection;
 using RecipeRunner.Host.Running;
 using RecipeRunner.Host.Sealing;
 using RecipeRunner.Model.Weights;
@@ -12,12 +11,7 @@ internal static class SummaryPage
     /// <summary>The page's markup.</summary>
     public static string Of(StudyRecord record)
     {
-        var page = new Html();
-        page.Raw("<!DOCTYPE html>")
-            .Raw(
-                "<html lang=\"en\"><head><meta charset=\"utf-8\"><meta name=\"viewport\" content=\"width=device-width\">"
-            );
-        page.Element("title", record.Title).Raw($"<style>{Style()}</style></head><body><main>");
+        var page = PageFrame.Open(record.Title);
         Opening(page, record);
         FindingsSection(page, record);
         if (record.MainWeights is { } weights)
@@ -36,7 +30,7 @@ internal static class SummaryPage
         CautionSection(page, record);
         FilesSection(page, record);
         RerunSection(page, record);
-        return page.Raw("</main></body></html>").ToString();
+        return PageFrame.Close(page);
     }
 
     private static void Opening(Html page, StudyRecord record)
@@ -196,14 +190,4 @@ internal static class SummaryPage
         record.Inputs.IsEmpty ? "data/recipe"
         : HoldsAll(record) ? "data/inputs"
         : "DIR";
-
-    /// <summary>The style of all pages.</summary>
-    internal static string Style()
-    {
-        using var stream = Assembly
-            .GetExecutingAssembly()
-            .GetManifestResourceStream("RecipeRunner.Host.Summarising.summary.css")!;
-        using var reader = new StreamReader(stream);
-        return reader.ReadToEnd();
-    }
 }

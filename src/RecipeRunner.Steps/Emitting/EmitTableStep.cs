@@ -1,6 +1,7 @@
 using System.Text;
 using RecipeRunner.Model.Space;
 using RecipeRunner.Model.Steps;
+using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Steps.Emitting;
 
@@ -37,16 +38,11 @@ public sealed record EmitTableStep(ITabular Table, string Name) : Step<EmittedFi
     private static void Write(StepContext context, string path, Table table)
     {
         using var writer = new StreamWriter(context.CreateOutput(path), Utf8, 1 << 16);
-        writer.Write(Line(table.Columns.Select(column => column.Name)));
+        writer.Write(CsvLine.Of(table.Columns.Select(column => column.Name)) + "\n");
         for (var row = 0; row < table.RowCount; row++)
         {
             context.Cancellation.ThrowIfCancellationRequested();
-            writer.Write(Line(table.Columns.Select(column => CellText.Of(column, row))));
+            writer.Write(CsvLine.Of(table.Columns.Select(column => CellText.Of(column, row))) + "\n");
         }
     }
-
-    private static string Line(IEnumerable<string> cells) => string.Join(',', cells.Select(Quoted)) + "\n";
-
-    private static string Quoted(string cell) =>
-        cell.AsSpan().IndexOfAny(",\"\r\n") < 0 ? cell : $"\"{cell.Replace("\"", "\"\"", StringComparison.Ordinal)}\"";
 }

@@ -67,37 +67,20 @@ internal sealed class RecordPeek(TextInput text, PeekColumn[] columns, PeekForm 
 
     private static IEnumerable<(string Name, string Text)> Doubts(PeekTimes times, RecordScan scan)
     {
-        if (times.Unreadable > 0)
+        (int Count, string One, string Many, string What)[] doubts =
+        [
+            (
+                times.Unreadable,
+                "row has",
+                "rows have",
+                FormattableString.Invariant($"no time that can be read, the first in line {times.FirstUnreadable}")
+            ),
+            (scan.TwiceCount, "value stands", "values stand", $"twice, the first {scan.Twice}"),
+            (scan.NegativeCount, "value is", "values are", $"below zero, the first {scan.Negative}"),
+        ];
+        foreach (var (count, one, many, what) in doubts.Where(doubt => doubt.Count > 0))
         {
-            yield return (
-                "caution",
-                string.Create(
-                    CultureInfo.InvariantCulture,
-                    $"{Counted.Of(times.Unreadable, "row has", "rows have")} no time that can be read, the first in line {times.FirstUnreadable}."
-                )
-            );
-        }
-
-        if (scan.TwiceCount > 0)
-        {
-            yield return (
-                "caution",
-                string.Create(
-                    CultureInfo.InvariantCulture,
-                    $"{Counted.Of(scan.TwiceCount, "value stands", "values stand")} twice, the first {scan.Twice}."
-                )
-            );
-        }
-
-        if (scan.NegativeCount > 0)
-        {
-            yield return (
-                "caution",
-                string.Create(
-                    CultureInfo.InvariantCulture,
-                    $"{Counted.Of(scan.NegativeCount, "value is", "values are")} below zero, the first {scan.Negative}."
-                )
-            );
+            yield return ("caution", $"{Counted.Of(count, one, many)} {what}.");
         }
 
         if (scan.Texts.Count > 0)

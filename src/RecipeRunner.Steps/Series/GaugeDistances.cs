@@ -55,10 +55,6 @@ internal sealed class GaugeDistances
         return closest[^1].Bound >= best ? best : NearestOfAll(best, reports);
     }
 
-    /// <summary>Metres to one gauge, 0 inside the basin.</summary>
-    /// <param name="gauge">Index of the gauge.</param>
-    public double ToGauge(int gauge) => Exact(gauge);
-
     private double? NearestOfAll(double? best, ReadOnlySpan<bool> reports)
     {
         for (var gauge = 0; gauge < reports.Length; gauge++)
@@ -72,7 +68,7 @@ internal sealed class GaugeDistances
         return best;
     }
 
-    private double Nearer(double? best, int gauge) => Math.Min(best ?? double.PositiveInfinity, Exact(gauge));
+    private double Nearer(double? best, int gauge) => Math.Min(best ?? double.PositiveInfinity, ToGauge(gauge));
 
     private double BoundOf(int gauge)
     {
@@ -82,7 +78,9 @@ internal sealed class GaugeDistances
         return Math.Sqrt((east * east) + (north * north));
     }
 
-    private double Exact(int gauge)
+    /// <summary>Metres to one gauge, 0 inside the basin.</summary>
+    /// <param name="gauge">Index of the gauge.</param>
+    public double ToGauge(int gauge)
     {
         if (!exact.TryGetValue(gauge, out var metres))
         {

@@ -54,7 +54,7 @@ internal static class ByYearFile
         var element = row[2].Span;
         if (id.Length != GhcnLayout.IdLength)
         {
-            AddProblem(rows, line, 1, $"'{id}' is not a station's id, which has {GhcnLayout.IdLength} characters.");
+            rows.AddProblem(line, 1, $"'{id}' is not a station's id, which has {GhcnLayout.IdLength} characters.");
             return;
         }
 
@@ -75,7 +75,7 @@ internal static class ByYearFile
         var line = CsvText.LineOf(row);
         if (row[1].Span.Length != 8 || !TimeText.TryRead(row[1].Span, out var date) || date.Detail != TimeDetail.Date)
         {
-            AddProblem(rows, line, 2, $"'{row[1].Span}' is not a date such as 20240131.");
+            rows.AddProblem(line, 2, $"'{row[1].Span}' is not a date such as 20240131.");
             return;
         }
 
@@ -88,13 +88,13 @@ internal static class ByYearFile
             )
         )
         {
-            AddProblem(rows, line, 4, $"'{row[3].Span}' is not a value.");
+            rows.AddProblem(line, 4, $"'{row[3].Span}' is not a value.");
             return;
         }
 
         if (row[4].Span.Length > 1 || row[5].Span.Length > 1)
         {
-            AddProblem(rows, line, 5, $"'{row[4].Span},{row[5].Span}' are not flags of one letter.");
+            rows.AddProblem(line, 5, $"'{row[4].Span},{row[5].Span}' are not flags of one letter.");
             return;
         }
 
@@ -107,12 +107,4 @@ internal static class ByYearFile
     }
 
     private static char FlagOf(ReadOnlySpan<char> text) => text.IsEmpty ? GhcnLayout.Blank : text[0];
-
-    private static void AddProblem(GhcnRows rows, int line, int column, string what) =>
-        rows.Problems.Add(
-            "RR0279",
-            new Place(rows.File, line, column),
-            what,
-            "The file does not follow the format; fetch it again."
-        );
 }

@@ -77,7 +77,7 @@ internal static class DlyFile
             || month is < 1 or > 12
         )
         {
-            AddProblem(rows, line, 12, $"'{row.AsSpan(11, 6)}' is not a year and month.");
+            rows.AddProblem(line, 12, $"'{row.AsSpan(11, 6)}' is not a year and month.");
             return;
         }
 
@@ -92,7 +92,7 @@ internal static class DlyFile
             var at = FirstValue + ((day - 1) * DayLength);
             if (!TryNumber(row.AsSpan(at, ValueLength).TrimStart(), out var value))
             {
-                AddProblem(rows, head.Line, at + 1, $"'{row.AsSpan(at, ValueLength)}' is not a value.");
+                rows.AddProblem(head.Line, at + 1, $"'{row.AsSpan(at, ValueLength)}' is not a value.");
             }
             else if (day <= length)
             {
@@ -101,8 +101,7 @@ internal static class DlyFile
             }
             else if (value != GhcnLayout.Missing)
             {
-                AddProblem(
-                    rows,
+                rows.AddProblem(
                     head.Line,
                     at + 1,
                     FormattableString.Invariant(
@@ -115,14 +114,6 @@ internal static class DlyFile
 
     private static bool TryNumber(ReadOnlySpan<char> text, out int number) =>
         int.TryParse(text, NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture, out number);
-
-    private static void AddProblem(GhcnRows rows, int line, int column, string what) =>
-        rows.Problems.Add(
-            "RR0279",
-            new Place(rows.File, line, column),
-            what,
-            "The file does not follow the format; fetch it again."
-        );
 
     private readonly ref struct RowHead(int line, ReadOnlySpan<char> id, ReadOnlySpan<char> element)
     {

@@ -36,6 +36,18 @@ internal sealed class GhcnRows(string file, TimeStep step, IReadOnlySet<string>?
     /// <summary>True where the recipe wants this station.</summary>
     public bool IsWanted(ReadOnlySpan<char> id) => known is null || known.Value.Contains(id);
 
+    /// <summary>Notes what does not follow the format.</summary>
+    /// <param name="line">Its line.</param>
+    /// <param name="column">Its column, from 1.</param>
+    /// <param name="what">What was found.</param>
+    public void AddProblem(int line, int column, string what) =>
+        Problems.Add(
+            "RR0279",
+            new Place(file, line, column),
+            what,
+            "The file does not follow the format; fetch it again."
+        );
+
     /// <summary>Adds a value.</summary>
     /// <param name="id">The station.</param>
     /// <param name="date">The day.</param>

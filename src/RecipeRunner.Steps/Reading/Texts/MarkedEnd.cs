@@ -6,32 +6,13 @@ namespace RecipeRunner.Steps.Reading.Texts;
 /// A packed file with one more gzip member after it that holds <see cref="Mark"/>. The platform's unpacker takes a file that
 /// was cut for a whole one; of a cut file it never comes to the mark.
 /// </summary>
-internal sealed class MarkedEnd(Stream packed) : Stream
+internal sealed class MarkedEnd(Stream packed) : ForwardStream
 {
     private static readonly byte[] Member = Pack();
     private int markGiven;
 
     /// <summary>What stands at the very end; no text holds it.</summary>
     public static ReadOnlySpan<byte> Mark => "\0end of the packed file\0"u8;
-
-    /// <inheritdoc/>
-    public override bool CanRead => true;
-
-    /// <inheritdoc/>
-    public override bool CanSeek => false;
-
-    /// <inheritdoc/>
-    public override bool CanWrite => false;
-
-    /// <inheritdoc/>
-    public override long Length => throw new NotSupportedException();
-
-    /// <inheritdoc/>
-    public override long Position
-    {
-        get => throw new NotSupportedException();
-        set => throw new NotSupportedException();
-    }
 
     /// <inheritdoc/>
     public override int Read(Span<byte> buffer)
@@ -48,21 +29,6 @@ internal sealed class MarkedEnd(Stream packed) : Stream
         markGiven += rest.Length;
         return rest.Length;
     }
-
-    /// <inheritdoc/>
-    public override int Read(byte[] buffer, int offset, int count) => Read(buffer.AsSpan(offset, count));
-
-    /// <inheritdoc/>
-    public override void Flush() { }
-
-    /// <inheritdoc/>
-    public override long Seek(long offset, SeekOrigin origin) => throw new NotSupportedException();
-
-    /// <inheritdoc/>
-    public override void SetLength(long value) => throw new NotSupportedException();
-
-    /// <inheritdoc/>
-    public override void Write(byte[] buffer, int offset, int count) => throw new NotSupportedException();
 
     private static byte[] Pack()
     {

@@ -8,7 +8,7 @@ namespace RecipeRunner.Steps.Reading.Texts;
 /// Unpacks gzip (RFC 1952), one member or several, forward only. Damage is refused, and so is a file that swells beyond
 /// reason: past 256 MB to more than 500 times its packed size, which no record of rain does.
 /// </summary>
-internal sealed class UnpackedStream : Stream
+internal sealed class UnpackedStream : ForwardStream
 {
     private const long FreeBytes = 256L << 20;
     private const int MostTimes = 500;
@@ -32,25 +32,6 @@ internal sealed class UnpackedStream : Stream
     }
 
     /// <inheritdoc/>
-    public override bool CanRead => true;
-
-    /// <inheritdoc/>
-    public override bool CanSeek => false;
-
-    /// <inheritdoc/>
-    public override bool CanWrite => false;
-
-    /// <inheritdoc/>
-    public override long Length => throw new NotSupportedException();
-
-    /// <inheritdoc/>
-    public override long Position
-    {
-        get => throw new NotSupportedException();
-        set => throw new NotSupportedException();
-    }
-
-    /// <inheritdoc/>
     public override int Read(Span<byte> buffer)
     {
         if (filled - start <= MarkedEnd.Mark.Length)
@@ -64,21 +45,6 @@ internal sealed class UnpackedStream : Stream
         start += ready.Length;
         return ready.Length;
     }
-
-    /// <inheritdoc/>
-    public override int Read(byte[] buffer, int offset, int count) => Read(buffer.AsSpan(offset, count));
-
-    /// <inheritdoc/>
-    public override void Flush() { }
-
-    /// <inheritdoc/>
-    public override long Seek(long offset, SeekOrigin origin) => throw new NotSupportedException();
-
-    /// <inheritdoc/>
-    public override void SetLength(long value) => throw new NotSupportedException();
-
-    /// <inheritdoc/>
-    public override void Write(byte[] buffer, int offset, int count) => throw new NotSupportedException();
 
     /// <inheritdoc/>
     protected override void Dispose(bool disposing)
