@@ -1,6 +1,4 @@
 using System.Globalization;
-using NodaTime;
-using NodaTime.Text;
 using RecipeRunner.Model.Wording;
 
 namespace RecipeRunner.Host.Comparing;
@@ -8,10 +6,6 @@ namespace RecipeRunner.Host.Comparing;
 /// <summary>Changed areal values as rows for people and machines.</summary>
 public static class DifferenceTable
 {
-    private static readonly LocalDateTimePattern Time = LocalDateTimePattern.CreateWithInvariantCulture(
-        "uuuu'-'MM'-'dd'T'HH':'mm"
-    );
-
     /// <summary>The columns: basin, step, values in mm, and the four parts, which add up to the difference.</summary>
     public static IReadOnlyList<string> Heads { get; } =
     [
@@ -45,7 +39,7 @@ public static class DifferenceTable
         return
         [
             change.Basin,
-            Label(change.Label),
+            change.Step,
             .. new[] { was, now, now - was }
                 .Concat(parts)
                 .Select(number => number.ToString("0.#########", CultureInfo.InvariantCulture)),
@@ -55,9 +49,6 @@ public static class DifferenceTable
     /// <summary>All changes as lines of CSV (RFC 4180).</summary>
     public static IEnumerable<string> Csv(StudyDifference difference) =>
         difference.Rain.Select(change => CsvLine.Of(Row(change))).Prepend(CsvLine.Of(Heads));
-
-    private static string Label(LocalDateTime label) =>
-        label.TimeOfDay == LocalTime.Midnight ? LocalDatePattern.Iso.Format(label.Date) : Time.Format(label);
 
     private static decimal Written(double number) => Math.Round((decimal)number, 9);
 }

@@ -87,6 +87,15 @@ internal sealed class RainAttribution
 
         var (bySettings, byWeights, byReporting) = (settings - before, weights - settings, reporting - weights);
         var rest = after - before - bySettings - byWeights - byReporting;
-        return new RainChange(basin, label, before, after, bySettings, byWeights, byReporting, rest);
+        return new RainChange(
+            basin,
+            was.Times.Step.LabelText(label),
+            before,
+            after,
+            bySettings,
+            byWeights,
+            byReporting,
+            rest
+        );
     }
 }

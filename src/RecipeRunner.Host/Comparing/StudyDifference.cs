@@ -1,5 +1,4 @@
 using System.Collections.Immutable;
-using NodaTime;
 
 namespace RecipeRunner.Host.Comparing;
 
@@ -11,7 +10,7 @@ public sealed record Change(string Name, string Was, string Is);
 
 /// <summary>How an areal value changed from one study to another, and because of what. The four parts add up to the difference.</summary>
 /// <param name="Basin">The basin's id.</param>
-/// <param name="Label">The label of the step of time.</param>
+/// <param name="Step">The step of time, as tables and traces name it.</param>
 /// <param name="WasMillimetres">What the first study has.</param>
 /// <param name="IsMillimetres">What the second has.</param>
 /// <param name="BySettings">The part due to another gap policy or threshold.</param>
@@ -20,7 +19,7 @@ public sealed record Change(string Name, string Was, string Is);
 /// <param name="ByDepths">The part due to depths revised at gauges that report in both.</param>
 public sealed record RainChange(
     string Basin,
-    LocalDateTime Label,
+    string Step,
     double WasMillimetres,
     double IsMillimetres,
     double BySettings,

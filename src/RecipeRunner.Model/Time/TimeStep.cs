@@ -23,6 +23,9 @@ public abstract record TimeStep : ISettingValue
     /// <summary>How far the clock of the record is ahead of UTC; null where it is not said.</summary>
     public Offset? UtcOffset { get; }
 
+    /// <summary>That offset as settings write it, such as <c>+01:00</c>; null where it is not said.</summary>
+    public string? UtcOffsetText => UtcOffset is { } offset ? OffsetText.Format(offset) : null;
+
     /// <summary>True where a label is a date, false where it is a date and time.</summary>
     public abstract bool LabelsAreDates { get; }
 
@@ -105,7 +108,7 @@ public abstract record TimeStep : ISettingValue
     private protected static string Text(LocalTime time) => TimePattern.Format(time);
 
     /// <summary>What follows a step's words where the offset of its clock is known.</summary>
-    private protected string OffsetWords => UtcOffset is { } offset ? $" at UTC{OffsetText.Format(offset)}" : "";
+    private protected string OffsetWords => UtcOffsetText is { } offset ? $" at UTC{offset}" : "";
 
     private static LocalTime TimeOf(string text) =>
         TimePattern.Parse(text).TryGetValue(default, out var time)

@@ -91,7 +91,7 @@ public static class ToLongerStepsVerbs
     /// <param name="complete">How many of the shorter steps must have a value; all of them where not given.</param>
     /// <example><code>var sixHours = rain.ToHours(6);</code></example>
     public static RainRecords ToHours(this RainRecords rain, int hours, ICompletenessRule? complete = null) =>
-        Sum(rain, TimeStep.Hours(hours, OffsetText(rain)), complete);
+        Sum(rain, TimeStep.Hours(hours, rain.Times.Step.UtcOffsetText), complete);
 
     /// <summary>Sums records of minutes or hours over observation days, exactly by their intervals.</summary>
     /// <param name="rain">Gauge records.</param>
@@ -104,7 +104,7 @@ public static class ToLongerStepsVerbs
         string endingAt,
         string? utcOffset = null,
         ICompletenessRule? complete = null
-    ) => Sum(rain, TimeStep.Days(endingAt, utcOffset ?? OffsetText(rain)), complete);
+    ) => Sum(rain, TimeStep.Days(endingAt, utcOffset ?? rain.Times.Step.UtcOffsetText), complete);
 
     /// <summary>Sums records over calendar months; a day belongs to the month that holds its date.</summary>
     /// <param name="rain">Gauge records.</param>
@@ -123,9 +123,4 @@ public static class ToLongerStepsVerbs
 
     private static RainRecords Sum(RainRecords rain, TimeStep to, ICompletenessRule? complete) =>
         rain.Run(new ToLongerStepsStep(rain, to, complete ?? AtLeast.Percent(100)));
-
-    private static string? OffsetText(RainRecords rain) =>
-        rain.Times.Step.UtcOffset is { } offset
-            ? NodaTime.Text.OffsetPattern.CreateWithInvariantCulture("+HH:mm").Format(offset)
-            : null;
 }
