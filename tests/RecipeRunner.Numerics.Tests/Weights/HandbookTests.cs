@@ -1,8 +1,5 @@
-using System.Globalization;
-using System.Text.Json;
 using RecipeRunner.Numerics.Tests.Support;
 using RecipeRunner.Numerics.Weights;
-using RecipeRunner.Testing;
 
 namespace RecipeRunner.Numerics.Tests.Weights;
 
@@ -12,20 +9,14 @@ namespace RecipeRunner.Numerics.Tests.Weights;
 /// </summary>
 public sealed class HandbookTests
 {
-    public static TheoryData<string> Examples => [.. Load().Select(example => example.Id)];
+    public static TheoryData<string> Examples => [.. HandbookExample.Load().Select(example => example.Id)];
 
     [Theory]
     [MemberData(nameof(Examples))]
     public void Weights_are_the_fractions_of_the_handbook(string id)
     {
-        Example example = Load().Single(candidate => candidate.Id == id);
-        // The example's unit is taken for a kilometre, so that the lattice does not show.
-        Network network = Network.Of([.. example.Gauges.Select(p => (p[0] * example.Scale, p[1] * example.Scale))]);
-        (double X, double Y)[][] rings =
-        [
-            .. example.Parts.SelectMany(part => part.Select((ring, i) => RingOf(ring, example.Scale, isHole: i > 0))),
-        ];
-        AreaWeights weights = AreaWeights.Of(network.Cells(), Shapes.Batch(rings), 1);
+        HandbookExample example = HandbookExample.Load().Single(candidate => candidate.Id == id);
+        AreaWeights weights = AreaWeights.Of(example.Network.Cells(), Shapes.Batch(example.Rings), 1);
         for (int gauge = 0; gauge < example.Weights.Length; gauge++)
         {
             int row = weights.Sites(0).IndexOf(gauge);
@@ -35,86 +26,5 @@ public sealed class HandbookTests
         double area = weights.PolygonArea(0) / (example.Scale * example.Scale);
         area.ShouldBe(example.Area, 1e-12 * example.Area);
         weights.Sites(0).Length.ShouldBe(example.Weights.Count(weight => weight > 0));
-    }
-
-    private static List<Example> Load()
-    {
-        using var document = JsonDocument.Parse(
-            File.ReadAllText(ReferenceFolder.PathOf("handbook/worked_examples.json"))
-        );
-        return
-        [
-            .. document
-                .RootElement.EnumerateArray()
-                .Where(row => row.GetProperty("kind").GetString() is "thiessen_geometry" or "thiessen_geometry_circle")
-                .Select(Example.Of),
-        ];
-    }
-
-    private static (double X, double Y)[] RingOf(double[][] points, double scale, bool isHole)
-    {
-        IEnumerable<double[]> open = points[0].SequenceEqual(points[^1]) ? points.SkipLast(1) : points;
-        (double X, double Y)[] ring = Shapes.CounterClockwise([.. open.Select(p => (p[0] * scale, p[1] * scale))]);
-        return isHole ? [.. ring.Reverse()] : ring;
-    }
-
-    private sealed record Example(
-        string Id,
-        double[][][][] Parts,
-        double[][] Gauges,
-        double[] Weights,
-        double Area,
-        double StatedTolerance
-    )
-    {
-        /// <summary>The lattice holds gauges on whole 1024ths of the unit; others it moves by 1e-8 of the unit.</summary>
-        public double Tolerance =>
-            Gauges.All(p => p.All(c => Math.Round(c * 1024) == c * 1024)) ? StatedTolerance : 1e-8;
-
-        public double Scale => Gauges.Max(p => p.Max(Math.Abs)) > 1e4 ? 1 : 1024;
-
-        public static Example Of(JsonElement row)
-        {
-            JsonElement inputs = row.GetProperty("inputs");
-            JsonElement expected = row.GetProperty("expected");
-            double[][][][] parts = inputs.TryGetProperty("circle", out JsonElement circle)
-                ?
-                [
-                    [PolygonOf(circle)],
-                ]
-                : inputs.GetProperty("basin_parts").Deserialize<double[][][][]>().ShouldNotBeNull();
-            return new Example(
-                row.GetProperty("id").GetString().ShouldNotBeNull(),
-                parts,
-                inputs.GetProperty("gauges").Deserialize<double[][]>().ShouldNotBeNull(),
-                expected.GetProperty("weights").Deserialize<double[]>().ShouldNotBeNull(),
-                expected.TryGetProperty("area", out JsonElement area) ? area.GetDouble() : AreaOf(circle),
-                double.Parse(
-                    row.GetProperty("tolerance").GetString().ShouldNotBeNull().Split(' ')[0],
-                    CultureInfo.InvariantCulture
-                )
-            );
-        }
-
-        private static double[][] PolygonOf(JsonElement circle)
-        {
-            int count = circle.GetProperty("n").GetInt32();
-            double radius = circle.GetProperty("r").GetDouble();
-            (double x, double y) = (circle.GetProperty("cx").GetDouble(), circle.GetProperty("cy").GetDouble());
-            return
-            [
-                .. Enumerable
-                    .Range(0, count)
-                    .Select(k => 2 * Math.PI * k / count)
-                    .Select(angle => (double[])[x + (radius * Math.Cos(angle)), y + (radius * Math.Sin(angle))]),
-            ];
-        }
-
-        private static double AreaOf(JsonElement circle)
-        {
-            int count = circle.GetProperty("n").GetInt32();
-            double radius = circle.GetProperty("r").GetDouble();
-            return count / 2.0 * radius * radius * Math.Sin(2 * Math.PI / count);
-        }
     }
 }
