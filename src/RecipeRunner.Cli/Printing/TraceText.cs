@@ -18,7 +18,7 @@ internal static class TraceText
     public static IEnumerable<string> Of(CellTrace cell) =>
         [
             Text(
-                    $"{cell.File}, line {cell.Line} ({cell.Row}), {cell.Column}: {(cell.Text.Length == 0 ? "blank" : cell.Text)} {cell.Unit}"
+                    $"{cell.File}, line {cell.Line} ({cell.Row}), {cell.Column}: {(cell.Text.Length == 0 ? "blank" : $"{cell.Text} {cell.Unit}")}"
                 )
                 .TrimEnd(),
             $"  {cell.Meaning}",
